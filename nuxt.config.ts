@@ -11,7 +11,7 @@ const pureDomain = {
 }
 
 export default defineNuxtConfig({
-  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/i18n', '@nuxt/eslint', 'nuxt-auth-utils', './modules/emitted-files'],
+  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/i18n', '@nuxt/eslint', 'nuxt-auth-utils', './modules/emitted-files', './modules/event-types'],
   srcDir: '.',
   dir: { shared: 'utils' },
   ignore: ['tests/**', 'seeds/**', 'docs/**', 'scripts/**'],

@@ -1,0 +1,4 @@
+import type { Migration } from '#server/database/migrate'
+import first from './2026-12-01-first'
+
+export const DIRECTORY_MIGRATIONS: Record<string, Migration> = { '2026-12-01-first': first }

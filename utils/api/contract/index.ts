@@ -1,0 +1,14 @@
+import type { z } from 'zod'
+import type { Contract } from '#shared/api/contract/define'
+import { VISITS } from '#shared/api/contract/visits'
+
+/** All routes. A route that is missing here fails the access test; one that is here and not built does too. */
+export const CONTRACT = { ...VISITS } as const
+
+export type RouteKey = keyof typeof CONTRACT
+type Of<K extends RouteKey> = (typeof CONTRACT)[K]
+type Parsed<C, P extends keyof Contract> = C extends Record<P, infer S> ? (S extends z.ZodType ? z.output<S> : undefined) : undefined
+
+export type ParamsOf<K extends RouteKey> = Parsed<Of<K>, 'params'>
+export type QueryOf<K extends RouteKey> = Parsed<Of<K>, 'query'>
+export type BodyOf<K extends RouteKey> = Parsed<Of<K>, 'body'>
