@@ -23,6 +23,8 @@ export default defineNuxtConfig({
   typescript: { strict: true, tsConfig: { exclude: ['../tests/**', '../seeds/**', '../scripts/**'] } },
   eslint: { config: { standalone: true } },
   css: ['~/assets/css/fonts.css', '~/assets/css/register.css'],
+  // named, or the module adds a second copy of Tailwind's own sheet
+  tailwindcss: { cssPath: '~/assets/css/register.css', viewer: false },
   app: { head: { viewport: 'width=device-width, initial-scale=1', titleTemplate: '%s' } },
   routeRules: { '/visits/new': { ssr: false } },
   i18n: {
