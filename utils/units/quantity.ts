@@ -33,23 +33,27 @@ export const fromRational = (r: Rational, unit: UnitCode, digits?: number): Quan
  * millionths of a ratio), rounded half to even. Throws `QuantityError` out-of-range when SQLite's signed 64 bits cannot hold it.
  */
 export function toBase(q: Quantity): bigint {
-  const base = roundToInteger(baseOf(q))
+  const base = roundToInteger(baseOf(parseDecimal(q.value), q.unit))
   if (base > INT64_MAX || base < -INT64_MAX - 1n) throw new QuantityError('out-of-range', { value: q.value, unit: q.unit })
   return base
 }
 
 /**
- * The exact value in `unit` (its own when left out). Throws `QuantityError`: wrong-dimension, needs-density between mass and
- * volume when none is given, density-not-positive.
+ * An exact value in another unit. Throws `QuantityError`: wrong-dimension, needs-density between mass and volume when none is
+ * given, density-not-positive.
  */
-export function toRational(q: Quantity, unit: UnitCode = q.unit, density?: Rate): Rational {
-  if (unit === q.unit) return parseDecimal(q.value)
-  const base = commensurable(q.unit, unit) ? baseOf(q) : acrossDensity(q, unit, density)
-  const { factor, zero = ZERO } = unitDefinition(unit)
+export function convertRational(value: Rational, from: UnitCode, to: UnitCode, density?: Rate): Rational {
+  if (from === to) return value
+  const base = commensurable(from, to) ? baseOf(value, from) : acrossDensity(value, from, to, density)
+  const { factor, zero = ZERO } = unitDefinition(to)
   return div(sub(base, zero), factor)
 }
 
-/** The quantity in another unit, as `fromRational` writes it. The same unit with no digits asked keeps its text. Errors of `toRational`. */
+/** The quantity's exact value in `unit` (its own when left out). Errors of `convertRational`. */
+export const toRational = (q: Quantity, unit: UnitCode = q.unit, density?: Rate): Rational =>
+  convertRational(parseDecimal(q.value), q.unit, unit, density)
+
+/** The quantity in another unit, as `fromRational` writes it. The same unit with no digits asked keeps its text. Errors of `convertRational`. */
 export function convert(q: Quantity, unit: UnitCode, options: ConvertOptions = {}): Quantity {
   if (unit === q.unit && options.digits === undefined) return q
   return fromRational(toRational(q, unit, options.density), unit, options.digits)
@@ -61,7 +65,7 @@ export const compareQuantities = (a: Quantity, b: Quantity, density?: Rate): -1 
 
 /**
  * The sum in `unit`, rounded once at the end. When all have that unit, the longest fraction among them is kept
- * ("0.90" + "1.2" = "2.10"), since that sum is exact. An empty list is zero. Errors of `toRational`.
+ * ("0.90" + "1.2" = "2.10"), since that sum is exact. An empty list is zero. Errors of `convertRational`.
  */
 export function addQuantities(list: readonly Quantity[], unit: UnitCode, options: ConvertOptions = {}): Quantity {
   const sum = list.reduce((total, q) => add(total, toRational(q, unit, options.density)), ZERO)
@@ -69,18 +73,17 @@ export function addQuantities(list: readonly Quantity[], unit: UnitCode, options
   return fromRational(sum, unit, options.digits ?? (sameUnit ? Math.max(0, ...list.map(q => decimalsOf(q.value))) : undefined))
 }
 
-function baseOf(q: Quantity): Rational {
-  const { factor, zero = ZERO } = unitDefinition(q.unit)
-  return add(mul(parseDecimal(q.value), factor), zero)
+function baseOf(value: Rational, unit: UnitCode): Rational {
+  const { factor, zero = ZERO } = unitDefinition(unit)
+  return add(mul(value, factor), zero)
 }
 
-function acrossDensity(q: Quantity, unit: UnitCode, density: Rate | undefined): Rational {
-  const [from, to] = [dimensionOf(q.unit), dimensionOf(unit)]
-  const params = { from: q.unit, to: unit }
-  if (!(from === 'mass' && to === 'volume') && !(from === 'volume' && to === 'mass')) throw new QuantityError('wrong-dimension', params)
-  if (!density) throw new QuantityError('needs-density', params)
-  if (rateDimension(density.unit) !== 'mass/volume') throw new QuantityError('wrong-dimension', { from: density.unit, to: 'mass/volume' })
+function acrossDensity(value: Rational, from: UnitCode, to: UnitCode, density: Rate | undefined): Rational {
+  const crossing = `${dimensionOf(from)}>${dimensionOf(to)}`
+  if (crossing !== 'mass>volume' && crossing !== 'volume>mass') throw new QuantityError('wrong-dimension', { from, to })
+  if (!density) throw new QuantityError('needs-density', { from, to })
+  if (rateDimension(density.unit) !== 'mass/volume') throw new QuantityError('wrong-dimension', { from: density.unit, to: 'lb/gal' })
   const perVolume = rateToRational(density)
   if (perVolume.n <= 0n) throw new QuantityError('density-not-positive', { value: density.value, unit: density.unit })
-  return from === 'mass' ? div(baseOf(q), perVolume) : mul(baseOf(q), perVolume)
+  return crossing === 'mass>volume' ? div(baseOf(value, from), perVolume) : mul(baseOf(value, from), perVolume)
 }
