@@ -30,7 +30,6 @@ export default defineNuxtConfig({
   i18n: {
     strategy: 'no_prefix',
     defaultLocale: 'en',
-    bundle: { optimizeTranslationDirective: false },
     langDir: 'locales',
     locales: [{
       code: 'en',

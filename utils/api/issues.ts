@@ -3,7 +3,7 @@ import type { Issue } from '#shared/errors'
 
 /** zod's findings in our codes: which field, why, and what its sentence names. Own refinements carry their code as the message. */
 export function issuesOf(error: ZodError, base: string): Issue[] {
-  return error.issues.map((issue) => {
+  return error.issues.map((issue): Issue => {
     const path = [base, ...issue.path.map(String)].filter(part => part !== '').join('.')
     switch (issue.code) {
       case 'invalid_type': return issue.input === undefined ? { path, code: 'required' } : { path, code: 'wrong-type', params: { expected: issue.expected } }
