@@ -7,11 +7,11 @@ export default defineNuxtModule({
     addTypeTemplate({
       filename: 'types/event-context.d.ts',
       getContents: () => `
-import type { Actor } from '#shared/access/abilities'
+import type { SignedIn } from '#server/services/sessions'
 declare module 'h3' {
   interface H3EventContext {
     /** Set by the session middleware: whoever is signed in, and who that is in the firm at hand (null: no firm chosen, or no role left). */
-    signedIn?: { accountId: string, email: string, sessionHash: Uint8Array, actor: Actor | null } | null
+    signedIn?: SignedIn | null
     /** True in a demonstration folder, for a loopback or private peer, without a forwarding header. */
     demo?: boolean
   }

@@ -23,6 +23,7 @@ export const ERROR_STATUS = {
   'weak-password': 422,
   'too-many': 429,
   'not-now': 503,
+  'firm-closed': 503,
 } as const
 
 export type ErrorCode = keyof typeof ERROR_STATUS

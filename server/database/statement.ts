@@ -28,3 +28,13 @@ export function statement<P, R = unknown>(raw: Raw, build: (p: <K extends keyof 
   const bind = (given: P) => parameters.map(value => isPlaceholder(value) ? (given as Record<string, unknown>)[value[PARAMETER]] : value)
   return { run: given => prepared.run(...bind(given)), get: given => prepared.get(...bind(given)), all: given => prepared.all(...bind(given)) }
 }
+
+/** What is prepared on a connection is made once and lives as long as the connection. */
+export function perConnection<T>(make: (raw: Raw) => T): (raw: Raw) => T {
+  const made = new WeakMap<Raw, T>()
+  return (raw) => {
+    const known = made.get(raw) ?? make(raw)
+    made.set(raw, known)
+    return known
+  }
+}

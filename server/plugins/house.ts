@@ -1,3 +1,4 @@
+import { checkDemonstrationHost } from '#server/services/demonstration'
 import { closeHouse, openHouse } from '#server/services/the-house'
 import { checkSettings } from '#server/services/settings'
 
@@ -5,6 +6,7 @@ import { checkSettings } from '#server/services/settings'
 export default defineNitroPlugin((nitro) => {
   const config = useRuntimeConfig()
   checkSettings(config)
-  openHouse({ dataDir: config.dataDir, keyDir: config.keyDir, logHost: config.logHost })
+  const house = openHouse({ dataDir: config.dataDir, keyDir: config.keyDir, logHost: config.logHost })
+  checkDemonstrationHost(house, process.env.NITRO_HOST || process.env.HOST)
   nitro.hooks.hook('close', () => closeHouse())
 })

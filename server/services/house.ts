@@ -43,6 +43,8 @@ export class House {
   readonly directory: Directory
   private readonly lock: Raw | null
   private readonly open: LRUCache<string, FirmFile>
+  /** Firms whose file did not open when it was last asked for, and why. */
+  readonly closedFirms = new Map<string, string>()
 
   constructor(readonly settings: HouseSettings, readonly world: World, options: { lock?: boolean } = {}) {
     mkdirSync(join(settings.dataDir, 'firms'), { recursive: true })
@@ -69,6 +71,19 @@ export class House {
     if (!existsSync(this.keyPath(slug))) throw new Error(`no key for firm ${slug}: ${this.keyPath(slug)}`)
     this.open.set(slug, file)
     return file
+  }
+
+  /** The firm's file, or null when it stays closed; the reason is kept for the operator (`closedFirms`), the other firms go on. */
+  openOrClosed(slug: string): FirmFile | null {
+    try {
+      const file = this.firm(slug)
+      this.closedFirms.delete(slug)
+      return file
+    }
+    catch (error) {
+      this.closedFirms.set(slug, error instanceof Error ? error.message : String(error))
+      return null
+    }
   }
 
   firmById(id: string): FirmFile {

@@ -1,3 +1,4 @@
+import type { IncomingMessage } from 'node:http'
 import type { EventHandler, H3Event } from 'h3'
 import type { z } from 'zod'
 import { ZodError } from 'zod'
@@ -10,6 +11,7 @@ import type { Issue } from '#shared/errors'
 import { AppError } from '#shared/errors'
 import { issuesOf } from '#shared/api/issues'
 import type { FirmFile, House } from '#server/services/house'
+import type { SignedIn } from '#server/services/sessions'
 import { theHouse } from '#server/services/the-house'
 import { words } from '#server/words/words'
 
@@ -23,7 +25,9 @@ export interface Call<K extends RouteKey> {
   params: ParamsOf<K>
   query: QueryOf<K>
   body: BodyOf<K>
-  /** @throws AppError 401/403 where nobody with a firm is signed in. */
+  /** @throws AppError 401 where nobody is signed in. */
+  session: SignedIn
+  /** @throws AppError 403 where nobody with a firm is signed in. */
   actor: Actor
   file: FirmFile
 }
@@ -49,12 +53,18 @@ export function defineRoute<K extends RouteKey, R>(key: K, handle: (call: Call<K
         params: parse(contract.params, getRouterParams(event, { decode: true }), ''),
         query: parse(contract.query, getQuery(event), ''),
         body: contract.body ? parse(contract.body, await readJson(event, contract.bodyLimit ?? DEFAULT_LIMIT), '') : undefined,
+        get session() {
+          if (!event.context.signedIn) throw new AppError('no-session')
+          return event.context.signedIn
+        },
         get actor() {
           if (!actor) throw new AppError('not-allowed')
           return actor
         },
         get file() {
-          return theHouse().firm(this.actor.firmSlug)
+          const file = theHouse().openOrClosed(this.actor.firmSlug)
+          if (!file) throw new AppError('firm-closed')
+          return file
         },
       } as Call<K>
       const result = await handle(call)
@@ -79,8 +89,14 @@ function authorise(event: H3Event, contract: Contract): Actor | null {
   }
   if (!signedIn) throw new AppError('no-session')
   if (contract.ability === 'signed-in') return signedIn.actor
-  if (!signedIn.actor || !can(signedIn.actor, contract.ability)) throw new AppError('not-allowed')
+  if (!signedIn.actor) throw closedOrNotAllowed(signedIn)
+  if (!can(signedIn.actor, contract.ability)) throw new AppError('not-allowed')
   return signedIn.actor
+}
+
+/** Nobody has a standing in a firm whose file failed its checks: that is not the caller's fault, and says so. */
+function closedOrNotAllowed(signedIn: SignedIn): AppError {
+  return new AppError(signedIn.firmClosed ? 'firm-closed' : 'not-allowed')
 }
 
 /** Unsafe methods come from our own pages (or from a program that sends neither header, which a browser never does across sites). */
@@ -89,7 +105,8 @@ function checkOrigin(event: H3Event): void {
   const site = getRequestHeader(event, 'sec-fetch-site')
   if (site && site !== 'same-origin' && site !== 'none') throw new AppError('cross-site')
   const origin = getRequestHeader(event, 'origin')
-  if (origin && new URL(origin).host !== getRequestHost(event)) throw new AppError('cross-site')
+  // 'null' (a sandboxed frame, a file) is no origin of ours
+  if (origin && (!URL.canParse(origin) || new URL(origin).host !== getRequestHost(event))) throw new AppError('cross-site')
 }
 
 function parse(schema: z.ZodType | undefined, value: unknown, path: string): unknown {
@@ -102,19 +119,29 @@ function parse(schema: z.ZodType | undefined, value: unknown, path: string): unk
 async function readJson(event: H3Event, limit: number): Promise<unknown> {
   const type = getRequestHeader(event, 'content-type') ?? ''
   if (!/^application\/json\b/i.test(type)) throw new AppError('wrong-kind')
-  const chunks: Buffer[] = []
-  let size = 0
-  for await (const chunk of event.node.req) {
-    size += (chunk as Buffer).length
-    if (size > limit) throw new AppError('too-large', [{ path: '', code: 'too-large', params: { limit } }])
-    chunks.push(chunk as Buffer)
-  }
+  const bytes = await readBytes(event.node.req, limit)
+  if (!bytes) throw new AppError('too-large', [{ path: '', code: 'too-large', params: { limit } }])
   try {
-    return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(Buffer.concat(chunks)))
+    return JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes))
   }
   catch {
     throw new AppError('malformed', [{ path: '', code: 'not-json' }])
   }
+}
+
+/** Null when there is more than the limit, whatever Content-Length says. The rest is read off and forgotten, so that the answer still arrives. */
+async function readBytes(stream: IncomingMessage, limit: number): Promise<Buffer | null> {
+  const chunks: Buffer[] = []
+  let size = 0
+  for await (const chunk of stream.iterator({ destroyOnReturn: false })) {
+    size += (chunk as Buffer).length
+    if (size > limit) {
+      stream.resume()
+      return null
+    }
+    chunks.push(chunk as Buffer)
+  }
+  return Buffer.concat(chunks)
 }
 
 const sentence = (issue: Issue) => ({ path: issue.path, code: issue.code, message: words(`errors.issues.${issue.code}`, issue.params) })
@@ -123,6 +150,7 @@ const sentence = (issue: Issue) => ({ path: issue.path, code: issue.code, messag
 function refuse(event: H3Event, error: unknown): ErrorAnswer {
   if (error instanceof AppError) {
     setResponseStatus(event, error.status)
+    if (typeof error.detail?.retryAfter === 'number') setResponseHeader(event, 'retry-after', error.detail.retryAfter)
     return { code: error.code, message: words(`errors.${error.code}`), issues: error.issues.map(sentence), detail: error.detail }
   }
   if (error instanceof ZodError) {

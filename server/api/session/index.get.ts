@@ -1,0 +1,1 @@
+export default defineRoute('GET /api/session', ({ event }) => sessionAnswer(event))
