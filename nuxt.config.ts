@@ -11,7 +11,7 @@ const pureDomain = {
 }
 
 export default defineNuxtConfig({
-  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/i18n', '@nuxt/eslint', 'nuxt-auth-utils', './modules/emitted-files', './modules/event-types'],
+  modules: ['@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/i18n', '@nuxt/eslint', 'nuxt-auth-utils', './modules/one-door', './modules/emitted-files', './modules/event-types'],
   srcDir: '.',
   dir: { shared: 'utils' },
   ignore: ['tests/**', 'seeds/**', 'docs/**', 'scripts/**'],
@@ -38,9 +38,7 @@ export default defineNuxtConfig({
       files: ['common', 'account', 'today', 'daybook', 'entry', 'visit', 'books', 'notices', 'checks', 'catalogues', 'errors', 'paper', 'mail'].map(f => `en/${f}.json`),
     }],
   },
-  auth: {
-    hash: { scrypt: { cost: 131072, blockSize: 8, parallelization: 1, maxMemory: 256 * 1024 * 1024 } },
-  },
+  auth: { loadStrategy: 'none' },
   runtimeConfig: {
     dataDir: '.data',
     keyDir: '.keys',
@@ -49,7 +47,7 @@ export default defineNuxtConfig({
     publicUrl: '',
     trustedProxy: '',
     mail: { url: '', from: '' },
-    session: { password: '', name: 'tankside' },
+    session: { password: '' },
   },
   nitro: {
     preset: 'node-server',

@@ -59,7 +59,7 @@ export async function makeFirm(dirs: Dirs, spec: FirmSpec = {}, world: World = r
 function build(house: House, { slug = 'quarry-lane', name = 'Quarry Lane Pest', domain = `${slug}.example`, since = '2020-01-01', demo = false }: FirmSpec, password: string): MadeFirm {
   const { world } = house
   const firm = house.createFirm({ id: newId(world), slug, name, address: '22 Quarry Lane, Albany, NY 12205', phone: '518 555 0100', country: 'US', mailFrom: `book@${domain}` })
-  const branch: BranchRow = { id: newId(world), name: 'Albany', address: '22 Quarry Lane, Albany, NY 12205', phone: '518 555 0100', county: 'Albany', region: 'US-NY', country: 'US', zone: 'America/New_York' }
+  const branch: BranchRow = { id: newId(world), name: 'Albany', address: '22 Quarry Lane, Albany, NY 12205', phone: '518 555 0100', county: 'Albany', region: 'NY', country: 'US', zone: 'America/New_York' }
   put(firm.raw, 'branch', branch)
   const account = (local: string, called: string, subject: { kind: 'person' | 'party', id: string }) => {
     const email = `${local}@${domain}`

@@ -13,3 +13,12 @@ type Parsed<C, P extends keyof Contract> = C extends Record<P, infer S> ? (S ext
 export type ParamsOf<K extends RouteKey> = Parsed<Of<K>, 'params'>
 export type QueryOf<K extends RouteKey> = Parsed<Of<K>, 'query'>
 export type BodyOf<K extends RouteKey> = Parsed<Of<K>, 'body'>
+
+/** What the caller hands in, before defaults. */
+type Given<C, P extends keyof Contract> = C extends Record<P, infer S> ? (S extends z.ZodType ? z.input<S> : undefined) : undefined
+export type BodyInputOf<K extends RouteKey> = Given<Of<K>, 'body'>
+export type ParamsInputOf<K extends RouteKey> = Given<Of<K>, 'params'>
+export type QueryInputOf<K extends RouteKey> = Given<Of<K>, 'query'>
+
+type Answers<C> = C extends { answers: infer A } ? { [S in keyof A]: A[S] extends z.ZodType ? z.output<A[S]> : never }[keyof A] : never
+export type AnswerOf<K extends RouteKey> = Answers<Of<K>>
