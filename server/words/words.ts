@@ -1,4 +1,4 @@
-import { compile, createCoreContext, registerMessageCompiler, translate } from '@intlify/core-base'
+import { compile, createCoreContext, registerMessageCompiler, resolveValue, translate } from '@intlify/core-base'
 import account from '~~/i18n/locales/en/account.json'
 import books from '~~/i18n/locales/en/books.json'
 import catalogues from '~~/i18n/locales/en/catalogues.json'
@@ -16,7 +16,7 @@ import visit from '~~/i18n/locales/en/visit.json'
 registerMessageCompiler(compile)
 
 const messages = { en: Object.assign({}, account, books, catalogues, checks, common, daybook, entry, errors, mail, notices, paper, today, visit) as Record<string, unknown> }
-const context = createCoreContext({ locale: 'en', fallbackLocale: 'en', messages: messages as never, missingWarn: false, fallbackWarn: false })
+const context = createCoreContext({ locale: 'en', fallbackLocale: 'en', messages: messages as never, messageResolver: resolveValue, missingWarn: false, fallbackWarn: false })
 
 /** The catalogue's sentence for a key, on paper, in mail and in answers; the key itself where the catalogue has none. */
 export type Words = (key: string, params?: Record<string, string | number>) => string
