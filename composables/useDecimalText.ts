@@ -1,3 +1,5 @@
+import { add, decimalsOf, parseDecimal, rational, sub, toDecimal } from '#shared/units/decimal'
+
 /** What a person's keys mean as a decimal number. */
 export type DecimalReading =
   | { kind: 'blank' }
@@ -19,6 +21,8 @@ function plain(whole: string, fraction: string): string {
 export function readDecimal(typed: string, group: string): DecimalReading {
   const text = typed.replace(/[\s\u00A0\u202F']/g, '')
   if (text === '') return { kind: 'blank' }
+  // a temperature may be below zero; keyboards write the minus in two ways
+  if (/^[-\u2212]/.test(text)) return negated(readDecimal(text.slice(1), group))
   if (!/^(?=.*\d)[\d.,]+$/.test(text)) return { kind: 'unreadable' }
   const marks = text.match(/[.,]/g) ?? []
   const [only] = marks
@@ -32,6 +36,12 @@ export function readDecimal(typed: string, group: string): DecimalReading {
   return readGrouped(text, marks)
 }
 
+function negated(reading: DecimalReading): DecimalReading {
+  if (reading.kind === 'value' && !reading.value.startsWith('-')) return { kind: 'value', value: `-${reading.value}` }
+  if (reading.kind === 'ambiguous') return { kind: 'ambiguous', thousands: `-${reading.thousands}`, decimal: `-${reading.decimal}` }
+  return { kind: 'unreadable' }
+}
+
 /** Several marks: all but a last, different one must part groups of three. */
 function readGrouped(text: string, marks: string[]): DecimalReading {
   const grouping = marks[0] ?? ''
@@ -42,14 +52,9 @@ function readGrouped(text: string, marks: string[]): DecimalReading {
   return wellFormed ? { kind: 'value', value: plain(groups.join(''), text.slice(at + 1)) } : { kind: 'unreadable' }
 }
 
-/** Adds a step to a decimal string, exactly, keeping the longer fraction; never below zero. */
+/** Adds a step to a decimal string, exactly, keeping the longer fraction; what is counted down ends at zero. */
 export function stepDecimal(value: string, step: string, sign: 1 | -1): string {
-  const places = Math.max(value.split('.')[1]?.length ?? 0, step.split('.')[1]?.length ?? 0)
-  const scaled = (text: string) => {
-    const [whole = '0', fraction = ''] = text.split('.')
-    return BigInt(whole + fraction.padEnd(places, '0'))
-  }
-  const sum = scaled(value || '0') + BigInt(sign) * scaled(step)
-  const digits = (sum < 0n ? 0n : sum).toString().padStart(places + 1, '0')
-  return places ? `${digits.slice(0, -places)}.${digits.slice(-places)}` : digits
+  const by = sign === 1 ? add : sub
+  const next = by(parseDecimal(value), parseDecimal(step))
+  return toDecimal(next.n < 0n ? rational(0n) : next, Math.max(decimalsOf(value), decimalsOf(step)))
 }

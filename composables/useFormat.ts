@@ -43,11 +43,11 @@ export function useFormat() {
 
   function moment(at: string | Date, options: Intl.DateTimeFormatOptions): string {
     const parts = new Intl.DateTimeFormat(language.value, options).formatToParts(typeof at === 'string' ? new Date(at) : at)
-    return parts
-      .map(part => part.type === 'dayPeriod' && language.value.startsWith('en') ? part.value.toLowerCase() : part.value)
-      .join('')
-      // Node's and the browser's ICU differ in the space before am and pm: without this the page would not hydrate
-      .replace(/[\u202F\u2009]/g, '\u00A0')
+    return parts.map((part, i) => {
+      // Node and browsers differ in the space before am and pm (U+202F or U+0020): one of our own, or the page would not hydrate
+      if (part.type === 'literal' && parts[i + 1]?.type === 'dayPeriod') return '\u00A0'
+      return part.type === 'dayPeriod' && language.value.startsWith('en') ? part.value.toLowerCase() : part.value
+    }).join('')
   }
   /** A calendar day `YYYY-MM-DD` has no zone of its own, so it is read and written in the same one. */
   const ofDay = (day: string, options: Intl.DateTimeFormatOptions) => moment(`${day}T12:00:00Z`, { ...options, timeZone: 'UTC' })
