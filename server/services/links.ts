@@ -5,6 +5,7 @@ import type { AccountRow, LinkRow } from '#server/database/directory/tables'
 import { linksIn } from '#server/database/directory/repositories/links'
 import { assertStrong } from '#server/services/passwords'
 import { queueAccountMail } from '#server/services/account-mail'
+import type { SignedIn } from '#server/services/sessions'
 import { endEverySession, newSecret, recordEvent, secretHash } from '#server/services/sessions'
 import type { Door } from '#server/services/sign-in'
 import { comeIn } from '#server/services/sign-in'
@@ -61,7 +62,7 @@ export async function lookAtLink({ house, limits, caller }: Door, token: string)
  * Sets the password by a link, once: every open link and every session of the account ends, and the caller is signed in.
  * @returns the new session's secret. @throws AppError 410, 422, 429, 503.
  */
-export async function useLink(door: Door, given: { token: string, password: string, name?: string | undefined }): Promise<string> {
+export async function useLink(door: Door, given: { token: string, password: string, name?: string | undefined }, replaces: SignedIn | null): Promise<string> {
   const { house, limits, passwords, caller } = door
   await limits.tryLink(caller.address)
   const { account } = openLink(house, given.token)
@@ -76,6 +77,6 @@ export async function useLink(door: Door, given: { token: string, password: stri
     linksIn(raw).close.run({ account_id: account.id, at: house.world.now().toISOString() })
     endEverySession(house, account.id)
     recordEvent(house, link.kind === 'invitation' ? 'invitation-used' : 'reset-used', account.id, caller)
-    return comeIn(door, account.id, null)
+    return comeIn(door, account.id, replaces)
   }).immediate()
 }

@@ -9,13 +9,15 @@ const limiter = (keyPrefix: string, points: number, duration: number) => new Rat
 /** A network of the sixth version hands every customer 2^64 addresses: they count as one. */
 const network = (address: string): string => address.includes(':') && !address.includes('.') ? address.split(':').slice(0, 4).join(':') : address
 
-async function take(from: RateLimiterMemory, key: string): Promise<void> {
+/** `onLimit` is called for the first refusal of a window only: what is written down of refusals must not be a way to fill the disk. */
+async function take(from: RateLimiterMemory, key: string, onLimit?: () => void): Promise<void> {
   try {
     await from.consume(key)
   }
   catch (refused) {
-    if (refused instanceof RateLimiterRes) throw new AppError('too-many', [], { retryAfter: Math.ceil(refused.msBeforeNext / 1000) })
-    throw refused
+    if (!(refused instanceof RateLimiterRes)) throw refused
+    if (refused.consumedPoints === from.points + 1) onLimit?.()
+    throw new AppError('too-many', [], { retryAfter: Math.ceil(refused.msBeforeNext / 1000) })
   }
 }
 
@@ -32,9 +34,9 @@ export class DoorLimits {
   private readonly invitesBy = limiter('invite', 60, HOUR)
 
   /** @throws AppError 429. */
-  async trySignIn(email: string, address: string): Promise<void> {
-    await take(this.address, network(address))
-    await take(this.pair, `${email} ${network(address)}`)
+  async trySignIn(email: string, address: string, onLimit: () => void): Promise<void> {
+    await take(this.address, network(address), onLimit)
+    await take(this.pair, `${email} ${network(address)}`, onLimit)
   }
 
   async signedIn(email: string, address: string): Promise<void> {

@@ -17,16 +17,6 @@ export interface Door {
   publicUrl: string
 }
 
-async function limited<T>(door: Door, accountId: string | null, work: Promise<T>): Promise<T> {
-  try {
-    return await work
-  }
-  catch (error) {
-    if (error instanceof AppError && error.code === 'too-many') recordEvent(door.house, 'limited', accountId, door.caller)
-    throw error
-  }
-}
-
 /**
  * Signs in by address and password. Unknown addresses, accounts without a password and wrong passwords answer alike, after the same work.
  * A session that the same browser still held (`replaces`) ends. @returns the new session's secret. @throws AppError 401, 429, 503.
@@ -35,7 +25,7 @@ export async function signIn(door: Door, given: { email: string, password: strin
   const { house, limits, passwords, caller } = door
   const { raw } = house.directory
   const account = accountsIn(raw).byEmail.get({ email: given.email })
-  await limited(door, account?.id ?? null, limits.trySignIn(given.email, caller.address))
+  await limits.trySignIn(given.email, caller.address, () => recordEvent(house, 'limited', account?.id ?? null, caller))
   const right = await passwords.matches(account?.password ?? null, given.password)
   if (!account || !right || account.disabled_at) {
     recordEvent(house, 'refused', account?.id ?? null, caller)
@@ -70,7 +60,7 @@ export async function changePassword({ house, limits, passwords, caller }: Door,
   const { raw } = house.directory
   const account = accountsIn(raw).byId.get({ id: signedIn.accountId })
   if (!account) throw new AppError('no-session')
-  await limits.trySignIn(account.email, caller.address)
+  await limits.trySignIn(account.email, caller.address, () => recordEvent(house, 'limited', account.id, caller))
   if (!await passwords.matches(account.password, given.current)) throw new AppError('refused', [{ path: 'current', code: 'password-wrong' }])
   await limits.signedIn(account.email, caller.address)
   assertStrong(given.next, account.email, 'next')

@@ -106,7 +106,7 @@ function checkOrigin(event: H3Event): void {
   if (site && site !== 'same-origin' && site !== 'none') throw new AppError('cross-site')
   const origin = getRequestHeader(event, 'origin')
   // 'null' (a sandboxed frame, a file) is no origin of ours
-  if (origin && (!URL.canParse(origin) || new URL(origin).host !== getRequestHost(event))) throw new AppError('cross-site')
+  if (origin && origin !== useRuntimeConfig(event).publicUrl && (!URL.canParse(origin) || new URL(origin).host !== getRequestHost(event))) throw new AppError('cross-site')
 }
 
 function parse(schema: z.ZodType | undefined, value: unknown, path: string): unknown {
