@@ -2,8 +2,8 @@ import { z } from 'zod'
 import { DecimalSchema } from '#shared/units/decimal'
 import { QuantitySchema } from '#shared/units/quantity'
 import { RateSchema } from '#shared/units/rate'
-import { InstantSchema } from '#shared/time/zoned'
-import { BookIdSchema, CodedSchema, RecordIdSchema, ReferSchema, ZoneSchema, text } from '#shared/records/shapes'
+import { InstantSchema, ZoneSchema } from '#shared/time/zoned'
+import { BookIdSchema, CodedSchema, RecordIdSchema, ReferSchema, text } from '#shared/records/shapes'
 
 export const DID = ['mixed', 'applied', 'assisted', 'supervised', 'trained'] as const
 

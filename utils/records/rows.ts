@@ -72,7 +72,7 @@ export type Confirmation = (typeof CONFIRMATIONS)[number]
 
 /** How a root stands from leaf `from_seq` on (to before `until_seq`, or still). `kind` 'nothing' is a visit with nothing applied: a row of the Daybook, not an entry. */
 export interface EntryHeadRow {
-  root: string, from_seq: number, until_seq: number | null, kind: 'entry' | 'nothing', facts_seq: number, head: string, status: Status, confirmation: Confirmation, owed_by: string | null, author: string,
+  root: string, root_seq: number, from_seq: number, until_seq: number | null, kind: 'entry' | 'nothing', facts_seq: number, head: string, status: Status, confirmation: Confirmation, owed_by: string | null, author: string,
   visit_id: string | null, reference: string, facts_hash: Uint8Array | null, branch_id: string, place_id: string | null, place_name: string, county: string, region: string,
   local_day: string, finished_at: string, recorded_at: string, person_id: string | null, person_name: string,
   number: string | null, product_name: string | null, ingredient: string | null, method_text: string | null, target_text: string | null,

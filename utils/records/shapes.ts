@@ -26,13 +26,3 @@ export const referId = (refer: Refer | null): string | null => refer && 'id' in 
 
 /** SHA-256 as lower-case hex. */
 export const HashSchema = z.string().regex(/^[0-9a-f]{64}$/)
-
-export const ZoneSchema = z.string().max(60).refine((zone) => {
-  try {
-    new Intl.DateTimeFormat('en', { timeZone: zone })
-    return true
-  }
-  catch {
-    return false
-  }
-}, { error: 'unknown-zone' })

@@ -1,8 +1,8 @@
 import { z } from 'zod'
-import { DaySchema, InstantSchema } from '#shared/time/zoned'
+import { DaySchema, InstantSchema, ZoneSchema } from '#shared/time/zoned'
 import { QuantitySchema } from '#shared/units/quantity'
 import { EntrySubmissionSchema } from '#shared/records/entry'
-import { BookIdSchema, CodedSchema, HashSchema, RecordIdSchema, ReferSchema, ZoneSchema, text } from '#shared/records/shapes'
+import { BookIdSchema, CodedSchema, HashSchema, RecordIdSchema, ReferSchema, text } from '#shared/records/shapes'
 
 const PartSchema = z.strictObject({ id: RecordIdSchema, hash: HashSchema })
 

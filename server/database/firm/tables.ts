@@ -51,7 +51,8 @@ export interface FirmDatabase extends FactsRows, StandingRows {
   equipment: EquipmentRow
   leaf: LeafRow
   leaf_body: LeafBodyRow
-  entry_search: { root: string, words: string }
+  /** Full text of how an entry stands now; `rowid` is `entry_head.root_seq`. */
+  entry_search: { rowid: number, words: string, entry_search: string, rank: number }
   notice: NoticeRow
   outbox: OutboxRow
   notice_event: NoticeEventRow

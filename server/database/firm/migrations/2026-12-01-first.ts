@@ -72,7 +72,7 @@ create table notice_leaf (${CHILD_KEY}, id text not null unique, visit_id text n
 `
 
 const STANDING = `
-create table entry_head (root text not null, from_seq integer not null, until_seq integer, kind text not null, facts_seq integer not null, head text not null, status text not null, confirmation text not null, owed_by text, author text not null,
+create table entry_head (root text not null, root_seq integer not null, from_seq integer not null, until_seq integer, kind text not null, facts_seq integer not null, head text not null, status text not null, confirmation text not null, owed_by text, author text not null,
   visit_id text, reference text not null, facts_hash blob, branch_id text not null, place_id text, place_name text not null, county text not null, region text not null,
   local_day text not null, finished_at text not null, recorded_at text not null, person_id text, person_name text not null, number text, product_name text, ingredient text, method_text text, target_text text,
   finding_rank integer not null, late integer not null, restricted_use integer not null, primary key (root, from_seq)) strict, without rowid;
@@ -101,7 +101,7 @@ create table entry_target (root text not null, from_seq integer not null, n inte
 create index entry_target_code on entry_target (code, root);
 create table entry_finding (root text not null, from_seq integer not null, n integer not null, check_name text not null, outcome text not null, primary key (root, from_seq, n)) strict, without rowid;
 create index entry_finding_check on entry_finding (check_name, outcome, root);
-create virtual table entry_search using fts5 (root unindexed, words, tokenize = 'unicode61 remove_diacritics 2', prefix = '2 3');
+create virtual table entry_search using fts5 (words, tokenize = 'unicode61 remove_diacritics 2', prefix = '2 3');
 insert into entry_search (entry_search, rank) values ('secure-delete', 1);
 `
 

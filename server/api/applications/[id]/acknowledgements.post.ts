@@ -1,0 +1,6 @@
+import { acknowledge } from '#server/services/change-entry'
+
+export default defineRoute('POST /api/applications/:id/acknowledgements', ({ file, actor, house, params, body }) => {
+  const { receipt, repeated } = acknowledge({ file, actor, world: house.world }, params.id, body)
+  return answer(repeated ? 200 : 201, receipt)
+})

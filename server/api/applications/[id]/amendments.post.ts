@@ -1,0 +1,6 @@
+import { amendEntry } from '#server/services/change-entry'
+
+export default defineRoute('POST /api/applications/:id/amendments', ({ file, actor, house, params, body }) => {
+  const { receipt, repeated } = amendEntry({ file, actor, world: house.world }, params.id, body)
+  return answer(repeated ? 200 : 201, receipt)
+})
