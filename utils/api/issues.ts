@@ -6,7 +6,7 @@ export function issuesOf(error: ZodError, base: string): Issue[] {
   return error.issues.map((issue): Issue => {
     const path = [base, ...issue.path.map(String)].filter(part => part !== '').join('.')
     switch (issue.code) {
-      case 'invalid_type': return issue.input === undefined ? { path, code: 'required' } : { path, code: 'wrong-type', params: { expected: issue.expected } }
+      case 'invalid_type': return issue.input === undefined ? { path, code: 'required' } : { path, code: 'wrong-type', params: { expected: String(issue.expected) } }
       case 'too_small': return issue.origin === 'string' && Number(issue.minimum) <= 1 ? { path, code: 'required' } : { path, code: 'too-small', params: { minimum: String(issue.minimum) } }
       case 'too_big': return { path, code: issue.origin === 'string' ? 'too-long' : 'too-big', params: { maximum: String(issue.maximum) } }
       case 'invalid_value': return { path, code: 'not-one-of', params: { values: issue.values.slice(0, 12).map(String).join(', ') } }

@@ -57,4 +57,4 @@ export type InnerOf<K extends Kind> = z.infer<(typeof INNER)[K]>
 export type EntryInner = InnerOf<'application'>
 
 /** A leaf as read back: its place in the log, its body, its inner part. */
-export interface Leaf<K extends Kind = Kind> { seq: number, kind: K, id: string, root: string, receivedAt: string, body: BodyOf<K>, inner: InnerOf<K> }
+export type Leaf<K extends Kind = Kind> = K extends Kind ? { seq: number, kind: K, id: string, root: string, receivedAt: string, body: BodyOf<K>, inner: InnerOf<K> } : never

@@ -27,11 +27,11 @@ const quantity = (q: Quantity | null) => q ? { value: q.value, unit: q.unit, bas
  * @param rootReference the reference of the root (an amendment keeps it).
  */
 export function project(leaf: Leaf, rootReference: string): Facts {
-  switch (leaf.body.kind) {
-    case 'visit': return { visit: [visitRow(leaf as Leaf<'visit'>)] }
-    case 'mix': return mixRows(leaf as Leaf<'mix'>)
+  switch (leaf.kind) {
+    case 'visit': return { visit: [visitRow(leaf)] }
+    case 'mix': return mixRows(leaf)
     case 'application':
-    case 'amendment': return entryRows(leaf as Leaf<'application' | 'amendment'>, rootReference)
+    case 'amendment': return entryRows(leaf, rootReference)
     case 'strike': {
       const { id, root, head, reason } = leaf.body.facts
       return { strike: [{ seq: leaf.seq, id, root, head, reason, by_person: signer(leaf) }] }

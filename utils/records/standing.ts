@@ -27,11 +27,11 @@ const isEntry = (leaf: Leaf): leaf is EntryLeaf => leaf.kind === 'application' |
 export function stand(leaves: readonly Leaf[]): Standing | null {
   const [root] = leaves
   if (!root) return null
-  if (root.kind === 'visit') return standNothing(root as Leaf<'visit'>)
+  if (root.kind === 'visit') return standNothing(root)
   if (root.kind !== 'application') return null
   const facts = leaves.filter(isEntry).at(-1)
   const last = leaves.at(-1)
-  return facts && last ? standEntry(root as Leaf<'application'>, facts, last.seq, change(leaves)) : null
+  return facts && last ? standEntry(root, facts, last.seq, change(leaves)) : null
 }
 
 /** Folds the changes: each amendment or strike by somebody else than whoever signed what it changes owes that person's word. */

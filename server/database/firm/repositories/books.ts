@@ -1,3 +1,4 @@
+import type { Compilable, Kysely } from 'kysely'
 import type { Raw } from '#server/database/connection'
 import { builder, statement } from '#server/database/statement'
 import type { FirmDatabase, LabelVersionRow, LicenceRow, PartyRow, PlaceRow, ProductRow } from '#server/database/firm/tables'
@@ -36,7 +37,7 @@ export function booksOf(raw: Raw): Books {
 function prepare(raw: Raw): Books {
   type Id = { id: string }
   const one = <T extends 'branch' | 'place' | 'product' | 'label_version' | 'person' | 'licence' | 'equipment'>(table: T) =>
-    statement<Id, FirmDatabase[T]>(raw, p => q.selectFrom(table).selectAll().where('id' as never, '=', p('id') as never))
+    statement<Id, FirmDatabase[T]>(raw, p => (q as unknown as Kysely<{ keyed: { id: string } }>).selectFrom(table as 'keyed').selectAll().where('id', '=', p('id')) as unknown as Compilable<FirmDatabase[T]>)
   const [branch, place, product, label, person, licence, equipment] = [one('branch'), one('place'), one('product'), one('label_version'), one('person'), one('licence'), one('equipment')] as const
   const firm = statement<object, FirmDatabase['firm']>(raw, () => q.selectFrom('firm').selectAll())
   const registrations = statement<Id, FirmDatabase['branch_registration']>(raw, p => q.selectFrom('branch_registration').selectAll().where('branch_id', '=', p('id')).orderBy('id'))

@@ -1,7 +1,7 @@
 import type { Raw } from '#server/database/connection'
 import { canonicalBytes } from '#shared/ledger/canonical'
 import { ZERO_HASH, chainHash, commitment, leafHash, toHex } from '#shared/ledger/hash'
-import type { Body, BodyOf, InnerOf, Kind, Leaf } from '#shared/records/body'
+import type { BodyOf, InnerOf, Kind, Leaf } from '#shared/records/body'
 import { BodySchema, INNER } from '#shared/records/body'
 import type { LeafBodyRow, LeafRow } from '#server/database/firm/tables'
 import { entryReference, project } from '#shared/records/projection'
@@ -47,13 +47,13 @@ export function readBody(raw: Raw, seq: number): unknown {
 export function parseLeaf(row: Pick<LeafRow, 'seq' | 'id' | 'kind' | 'root' | 'received_at'> & Pick<LeafBodyRow, 'body' | 'inner'>): Leaf {
   const body = BodySchema.parse(fromBytes(row.body))
   const inner = INNER[body.kind].parse(row.inner ? fromBytes(row.inner) : null)
-  return { seq: row.seq, kind: body.kind, id: row.id, root: row.root, receivedAt: row.received_at, body, inner }
+  return { seq: row.seq, kind: body.kind, id: row.id, root: row.root, receivedAt: row.received_at, body, inner } as Leaf
 }
 
 /** All leaves of one root, in order. Rows come from our own transaction or from a verified file: they are read, not doubted. */
 export const leavesOf = (raw: Raw, root: string): Leaf[] => prepared(raw).ofRoot(root).map(row => ({
-  seq: row.seq, kind: row.kind as Kind, id: row.id, root: row.root, receivedAt: row.received_at, body: fromBytes(row.body) as Body, inner: (row.inner ? fromBytes(row.inner) : null) as Leaf['inner'],
-}))
+  seq: row.seq, kind: row.kind, id: row.id, root: row.root, receivedAt: row.received_at, body: fromBytes(row.body), inner: row.inner ? fromBytes(row.inner) : null,
+}) as Leaf)
 
 export const leafById = (raw: Raw, id: string): LeafRow | undefined => prepared(raw).byId(id)
 
@@ -78,7 +78,7 @@ export function appendLeaf<K extends Kind>(raw: Raw, leaf: NewLeaf<K>): Leaf<K> 
   const bytes = canonicalBytes(body)
   const leaf_hash = leafHash(bytes)
   const prev_hash = last ? last.chain_hash : ZERO_HASH
-  const written: Leaf<K> = { seq, kind: body.kind as K, id: body.id, root: leaf.root, receivedAt: body.receivedAt, body, inner: leaf.inner }
+  const written = { seq, kind: body.kind, id: body.id, root: leaf.root, receivedAt: body.receivedAt, body, inner: leaf.inner } as Leaf<K>
 
   const before = written.id === leaf.root ? [] : leavesOf(raw, leaf.root)
   const leaves = [...before, written as Leaf]
