@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import type { Contract } from '#shared/api/contract/define'
-import { ErrorAnswerSchema } from '#shared/api/contract/define'
+import { ErrorAnswerSchema, FileAnswer } from '#shared/api/contract/define'
 import { CONTRACT } from '#shared/api/contract/index'
 import { ERROR_STATUS } from '#shared/errors'
 
@@ -23,7 +23,7 @@ const DENIED = [...new Set(Object.values(ERROR_STATUS))]
 function operation(contract: Contract): Json {
   const answers = Object.entries(contract.answers).map(([status, schema]) => [status, status === '204'
     ? { description: 'done, nothing to say' }
-    : { description: 'as asked', content: { 'application/json': { schema: schemaOf(schema, 'output') } } }])
+    : { description: 'as asked', content: { [schema === FileAnswer ? 'application/octet-stream' : 'application/json']: { schema: schemaOf(schema, 'output') } } }])
   const refusals = DENIED.map(status => [String(status), { $ref: '#/components/responses/Refusal' }])
   return {
     'summary': contract.summary,

@@ -63,6 +63,19 @@ describe('a session', () => {
   })
 })
 
+describe('comings and goings', () => {
+  it('are written down, with from where and on what', async () => {
+    const headers = { 'user-agent': 'Mozilla/5.0 (Linux; Android 14) Chrome/140.0' }
+    const { email } = first.people.applicator
+    await newClient(server)('/api/session', { json: { email, password: 'not the password' }, headers })
+    const client = await signIn(server, email)
+    await client('/api/session', { method: 'DELETE' })
+    const events: unknown[] = []
+    write('directory.sqlite', raw => events.push(...raw.prepare('select what, address, device from sign_in_event join account on account.id = account_id where email = ? order by sign_in_event.id').all(email)))
+    expect(events).toEqual([{ what: 'refused', address: '127.0.0.1', device: 'Chrome, Android' }, { what: 'signed-in', address: '127.0.0.1', device: 'node' }, { what: 'signed-out', address: '127.0.0.1', device: 'node' }])
+  })
+})
+
 describe('a firm whose book failed its checks', () => {
   it('stays closed and says so; the others go on', async () => {
     const client = await signIn(server, 'owner@broken.example')
