@@ -1,5 +1,5 @@
 import type { Actor } from '#shared/access/abilities'
-import { mayAcknowledge, mayChange } from '#shared/access/abilities'
+import { entryScope, mayAcknowledge, mayChange } from '#shared/access/abilities'
 import type { EntryReceipt } from '#shared/api/contract/visits'
 import { AppError } from '#shared/errors'
 import { equalBytes } from '#shared/ledger/hash'
@@ -13,7 +13,6 @@ import { appendLeaf, leafById, leavesOf } from '#server/database/firm/repositori
 import { mayReadEntry } from '#server/database/firm/repositories/heads'
 import { judgeEntry, receiptOf } from '#server/services/sign-visit'
 import type { Signed, Signing } from '#server/services/sign-visit'
-import { entryScope } from '#shared/access/abilities'
 
 type EntryLeaf = Leaf<'application' | 'amendment'>
 

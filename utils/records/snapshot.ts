@@ -1,12 +1,11 @@
 import { z } from 'zod'
 import type { Branch, Equipment, Firm, LabelVersion, Licence, PartyAtPlace, Person, Place, Product } from '#shared/books/shapes'
 import { BranchSchema, EquipmentSchema, FirmSchema, LabelVersionSchema, LicenceSchema, PARTY_ROLES, PlaceSchema, ProductSchema } from '#shared/books/shapes'
-import { CodedSchema, RecordIdSchema } from '#shared/records/shapes'
+import { CodedSchema, RecordIdSchema, referId } from '#shared/records/shapes'
 import type { EntryFacts } from '#shared/records/entry'
 import type { MixFacts, VisitFacts } from '#shared/records/visit'
 import { QuantitySchema } from '#shared/units/quantity'
 import type { Refer } from '#shared/records/shapes'
-import { referId } from '#shared/records/shapes'
 
 /** What the books said when the record was received (dated rows: on the local day of the work). Only what any party to the place may see. */
 const SnapshotPlaceSchema = PlaceSchema.pick({ name: true, address: true, town: true, county: true, region: true, country: true, kind: true }).extend({
