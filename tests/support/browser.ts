@@ -29,7 +29,7 @@ export async function withPage<T>(server: TestServer, { expected, ...options }: 
   await context.exposeFunction('reportViolation', (what: string) => noise.push(`content policy: ${what}`))
   await context.addInitScript(() => {
     const report = (window as unknown as { reportViolation: (what: string) => void }).reportViolation
-    addEventListener('securitypolicyviolation', event => report(`${event.violatedDirective} ${event.blockedURI} ${event.sample}`))
+    document.addEventListener('securitypolicyviolation', event => report(`${event.violatedDirective} ${event.blockedURI} ${event.sample}`))
   })
   const page = await context.newPage()
   page.on('console', (message) => { if (['error', 'warning'].includes(message.type())) noise.push(`console: ${message.text()}`) })

@@ -17,6 +17,6 @@ describe('LedgerStanding', () => {
     ['amended', 'confirmed', 'Amended author confirmed'], ['struck', 'cannot-be-had', 'Struck author’s word can’t be had'],
   ] as const)('%s, %s', async (status, confirmation, words) => {
     const standing = await mountSuspended(LedgerStanding, { props: { status, confirmation } })
-    expect(standing.text({ trim: true }).replace(/(On record|Amended|Struck)(?=\S)/, '$1 ')).toBe(words)
+    expect(standing.text().replace(/(On record|Amended|Struck)(?=\S)/, '$1 ')).toBe(words)
   })
 })
