@@ -1,6 +1,8 @@
 import type { Leaf } from '#shared/records/body'
 import { referId } from '#shared/records/shapes'
 import type { VisitSubmission } from '#shared/records/visit'
+import type { Raw } from '#server/database/connection'
+import { perConnection } from '#server/database/statement'
 import { booksOf } from '#server/database/firm/repositories/books'
 import { newId } from '#server/services/house'
 import type { FirmFile } from '#server/services/house'
@@ -11,6 +13,13 @@ import { localDay } from '#shared/time/zoned'
 
 interface Planned { facts: VisitSubmission['visit']['facts'], words: VisitSubmission['visit']['words'], receivedAt: string, entries: Leaf<'application'>[] }
 
+const prepared = perConnection((raw: Raw) => ({
+  notice: raw.prepare('insert into notice (id, visit_id, party_id, party_name, channel, address, language, state, planned_at, released_by, released_at, subject) values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)'),
+  outbox: raw.prepare('insert into outbox (id, notice_id, state, attempts, next_at, message_id) values (?, ?, ?, 0, ?, ?)'),
+  event: raw.prepare('insert into notice_event (id, notice_id, at, what, by_person, detail) values (?, ?, ?, ?, ?, ?)'),
+  ofVisit: raw.prepare<[string], { id: string, party_name: string, released_at: string | null }>('select id, party_name, released_at from notice where visit_id = ? order by id'),
+}))
+
 /**
  * In the visit's own transaction: one notice for each party to be told, *planned*, its outbox row *held* unless the signer tapped
  * "send when signed" for that party. Nothing is told of a visit with nothing applied.
@@ -19,9 +28,7 @@ export function planNotices({ file, actor, world }: Signing, { facts, words, rec
   const placeId = referId(facts.place)
   if (entries.length === 0 || !placeId) return
   const day = localDay(facts.leftAt, facts.zone)
-  const notice = file.raw.prepare('insert into notice (id, visit_id, party_id, party_name, channel, address, language, state, planned_at, released_by, released_at, subject) values (?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ?)')
-  const outbox = file.raw.prepare('insert into outbox (id, notice_id, state, attempts, next_at, message_id) values (?, ?, ?, 0, ?, ?)')
-  const event = file.raw.prepare('insert into notice_event (id, notice_id, at, what, by_person, detail) values (?, ?, ?, ?, ?, ?)')
+  const { notice, outbox, event } = prepared(file.raw)
   const place = entries[0]?.body.snapshot.place.name ?? ''
   for (const party of whoIsTold(booksOf(file.raw).parties(placeId), day)) {
     const id = newId(world)
@@ -33,6 +40,5 @@ export function planNotices({ file, actor, world }: Signing, { facts, words, rec
 }
 
 export function noticesOf(file: FirmFile, visitId: string): VisitReceipt['notices'] {
-  const rows = file.raw.prepare('select id, party_name, released_at from notice where visit_id = ? order by id').all(visitId) as { id: string, party_name: string, released_at: string | null }[]
-  return rows.map(row => ({ id: row.id, party: row.party_name, released: row.released_at !== null }))
+  return prepared(file.raw).ofVisit.all(visitId).map(row => ({ id: row.id, party: row.party_name, released: row.released_at !== null }))
 }

@@ -14,6 +14,8 @@ import { NotInBook, snapshotEntry, snapshotMix, snapshotVisit } from '#shared/re
 import type { EntrySnapshot } from '#shared/records/snapshot'
 import type { MixSubmission, VisitSubmission } from '#shared/records/visit'
 import { localDay } from '#shared/time/zoned'
+import type { Raw } from '#server/database/connection'
+import { perConnection } from '#server/database/statement'
 import { booksOf } from '#server/database/firm/repositories/books'
 import { appendLeaf, leafById, leavesOf } from '#server/database/firm/repositories/leaves'
 import type { FirmFile, World } from '#server/services/house'
@@ -92,9 +94,14 @@ function appendMix(signing: Signing, { facts, words }: MixSubmission, receivedAt
   })
 }
 
+const hashOf = perConnection((raw: Raw) => {
+  const prepare = (table: string) => raw.prepare<[string], { submission_hash: Uint8Array }>(`select submission_hash from ${table} where id = ?`)
+  return { visit: prepare('visit'), mix: prepare('mix'), application: prepare('application') }
+})
+
 /** The same submission again is answered with the first answer; another under the same id is a conflict. Whoever signed it may ask again, nobody else. */
 function repeatOf(signing: Signing, id: string, hash: Uint8Array, table: 'visit' | 'mix' | 'application'): Leaf | null {
-  const row = signing.file.raw.prepare(`select submission_hash from ${table} where id = ?`).get(id) as { submission_hash: Uint8Array } | undefined
+  const row = hashOf(signing.file.raw)[table].get(id)
   const [leaf] = row ? leavesOf(signing.file.raw, id) : []
   if (!row || !leaf) {
     if (leafById(signing.file.raw, id)) throw new AppError('id-in-use')

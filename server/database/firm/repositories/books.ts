@@ -1,6 +1,6 @@
 import type { Compilable, Kysely } from 'kysely'
 import type { Raw } from '#server/database/connection'
-import { builder, statement } from '#server/database/statement'
+import { builder, perConnection, statement } from '#server/database/statement'
 import type { FirmDatabase, LabelVersionRow, LicenceRow, PartyRow, PlaceRow, ProductRow } from '#server/database/firm/tables'
 import type { Branch, Equipment, Firm, LabelLimit, LabelUse, LabelVersion, Licence, Party, PartyAtPlace, Person, Place, Product } from '#shared/books/shapes'
 import type { MixFacts } from '#shared/records/visit'
@@ -8,7 +8,6 @@ import type { Books, MixSnapshot } from '#shared/records/snapshot'
 import { readBody } from '#server/database/firm/repositories/leaves'
 
 const q = builder<FirmDatabase>()
-const held = new WeakMap<Raw, Books>()
 
 export const toPlace = (r: PlaceRow): Place => ({
   id: r.id, parentId: r.parent_id, branchId: r.branch_id, kind: r.kind as Place['kind'], name: r.name, address: r.address, town: r.town, county: r.county, region: r.region, country: r.country, zone: r.zone,
@@ -26,15 +25,7 @@ export const toLabel = (r: LabelVersionRow, uses: LabelUse[]): LabelVersion => (
 })
 
 /** The firm's books read on the writing connection, inside whatever transaction is open: what a snapshot is taken from. */
-export function booksOf(raw: Raw): Books {
-  const known = held.get(raw)
-  if (known) return known
-  const made = prepare(raw)
-  held.set(raw, made)
-  return made
-}
-
-function prepare(raw: Raw): Books {
+export const booksOf = perConnection((raw: Raw): Books => {
   type Id = { id: string }
   const one = <T extends 'branch' | 'place' | 'product' | 'label_version' | 'person' | 'licence' | 'equipment'>(table: T) =>
     statement<Id, FirmDatabase[T]>(raw, p => (q as unknown as Kysely<{ keyed: { id: string } }>).selectFrom(table as 'keyed').selectAll().where('id', '=', p('id')) as unknown as Compilable<FirmDatabase[T]>)
@@ -78,7 +69,7 @@ function prepare(raw: Raw): Books {
       return { id, finished: body.facts.finished, lines: body.facts.lines.flatMap((line, n) => body.snapshot.lines[n] ? [{ ...body.snapshot.lines[n], amount: line.amount, lot: line.lot }] : []) }
     },
   }
-}
+})
 
 export const toLimit = (r: FirmDatabase['label_limit']): LabelLimit => ({
   of: r.of_what as LabelLimit['of'], unit: r.unit as LabelLimit['unit'], per: r.per as LabelLimit['per'], over: r.over_time as LabelLimit['over'], min: r.min, max: r.max, where: r.where_used, words: r.words,

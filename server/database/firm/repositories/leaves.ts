@@ -1,4 +1,5 @@
 import type { Raw } from '#server/database/connection'
+import { perConnection } from '#server/database/statement'
 import { canonicalBytes } from '#shared/ledger/canonical'
 import { ZERO_HASH, chainHash, commitment, leafHash, toHex } from '#shared/ledger/hash'
 import type { BodyOf, InnerOf, Kind, Leaf } from '#shared/records/body'
@@ -20,21 +21,15 @@ interface Prepared {
   insertBody: (row: LeafBodyRow) => void
 }
 
-const held = new WeakMap<Raw, Prepared>()
-
-function prepared(raw: Raw): Prepared {
-  const known = held.get(raw)
-  if (known) return known
+const prepared = perConnection((raw: Raw): Prepared => {
   const last = raw.prepare<[], { seq: number, chain_hash: Uint8Array }>('select seq, chain_hash from leaf order by seq desc limit 1')
   const body = raw.prepare<[number], LeafBodyRow>('select seq, body, inner, salt from leaf_body where seq = ?')
   const ofRoot = raw.prepare<[string], LeafRow & LeafBodyRow>('select leaf.*, body, inner, salt from leaf join leaf_body using (seq) where root = ? order by seq')
   const byId = raw.prepare<[string], LeafRow>('select * from leaf where id = ?')
   const insertLeaf = raw.prepare('insert into leaf (seq, id, kind, root, leaf_hash, prev_hash, chain_hash, received_at) values (@seq, @id, @kind, @root, @leaf_hash, @prev_hash, @chain_hash, @received_at)')
   const insertBody = raw.prepare('insert into leaf_body (seq, body, inner, salt) values (@seq, @body, @inner, @salt)')
-  const made: Prepared = { last: () => last.get(), body: seq => body.get(seq), ofRoot: root => ofRoot.all(root), byId: id => byId.get(id), insertLeaf: row => void insertLeaf.run(row), insertBody: row => void insertBody.run(row) }
-  held.set(raw, made)
-  return made
-}
+  return { last: () => last.get(), body: seq => body.get(seq), ofRoot: root => ofRoot.all(root), byId: id => byId.get(id), insertLeaf: row => void insertLeaf.run(row), insertBody: row => void insertBody.run(row) }
+})
 
 /** The body at `seq` as stored, parsed. @throws when there is none. */
 export function readBody(raw: Raw, seq: number): unknown {

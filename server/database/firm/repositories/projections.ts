@@ -1,5 +1,5 @@
-import type { Statement } from 'better-sqlite3'
 import type { Raw } from '#server/database/connection'
+import { perConnection } from '#server/database/statement'
 import type { Facts, FactsTable } from '#shared/records/rows'
 import type { Standing } from '#shared/records/standing'
 
@@ -8,25 +8,17 @@ export const FACTS_TABLES: readonly FactsTable[] = ['visit', 'mix', 'mix_line', 
 export const BESIDE_TABLES = ['entry_product', 'entry_ingredient', 'entry_person', 'entry_target', 'entry_finding'] as const
 
 type Insert = (row: object) => void
-const held = new WeakMap<Raw, Map<string, Insert>>()
+const inserts = perConnection(() => new Map<string, Insert>())
 
-const preparedBy = new WeakMap<Raw, { endHead: Statement, forget: Statement, remember: Statement }>()
-function standingStatements(raw: Raw) {
-  const known = preparedBy.get(raw)
-  if (known) return known
-  const made = {
-    endHead: raw.prepare('update entry_head set until_seq = ? where root = ? and until_seq is null'),
-    forget: raw.prepare('delete from entry_search where rowid = ?'),
-    remember: raw.prepare('insert into entry_search (rowid, words) values (?, ?)'),
-  }
-  preparedBy.set(raw, made)
-  return made
-}
+const standingStatements = perConnection((raw: Raw) => ({
+  endHead: raw.prepare('update entry_head set until_seq = ? where root = ? and until_seq is null'),
+  forget: raw.prepare('delete from entry_search where rowid = ?'),
+  remember: raw.prepare('insert into entry_search (rowid, words) values (?, ?)'),
+}))
 
 /** An insert into a table, prepared once a connection: the projection gives every row of a table the same columns. */
 function insertInto(raw: Raw, table: string, row: object): Insert {
-  const known = held.get(raw) ?? new Map<string, Insert>()
-  held.set(raw, known)
+  const known = inserts(raw)
   const made = known.get(table) ?? (() => {
     const columns = Object.keys(row)
     const prepared = raw.prepare(`insert into ${table} (${columns.join(', ')}) values (${columns.map(c => `@${c}`).join(', ')})`)
