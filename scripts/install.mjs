@@ -1,0 +1,4 @@
+import { checkNode, install } from './lib/steps.mjs'
+
+checkNode()
+install()
