@@ -24,6 +24,9 @@ export function openWriter(path: string): Raw {
   return raw
 }
 
+/** The file whose exclusive transaction says that somebody is in: no waiting, no journal of the write-ahead kind. */
+export const openLock = (path: string): Raw => new Database(path, { timeout: 0 })
+
 /** A reading connection: it cannot write, whatever asks it. */
 export function openReader(path: string): Raw {
   const raw = new Database(path, { readonly: true, fileMustExist: true })

@@ -3,7 +3,7 @@ import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
 import type { Kysely } from 'kysely'
 import { LRUCache } from 'lru-cache'
-import { kyselyOn, openReader, openWriter } from '#server/database/connection'
+import { kyselyOn, openLock, openReader, openWriter } from '#server/database/connection'
 import type { Raw } from '#server/database/connection'
 import { migrate } from '#server/database/migrate'
 import { brokenTriggers } from '#server/database/firm/append-only'
@@ -141,23 +141,17 @@ function closeFirm(file: FirmFile): void {
   file.raw.close()
 }
 
+/** An exclusive transaction that lasts as long as the house: the operating system ends it with the process, however that ends. */
 function takeLock(path: string): Raw {
   const lock = openLock(path)
   try {
     lock.exec('begin exclusive')
+    return lock
   }
   catch {
     lock.close()
     throw new Error(`another program holds this data folder (${path}): stop it first`)
   }
-  return lock
-}
-
-function openLock(path: string): Raw {
-  const raw = openWriter(path)
-  raw.pragma('journal_mode = DELETE')
-  raw.pragma('busy_timeout = 0')
-  return raw
 }
 
 /** Makes the firm's Ed25519 key, outside the data. @returns the fingerprint: SHA-256 of the public key, hex. */
