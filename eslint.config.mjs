@@ -16,7 +16,7 @@ export default withNuxt(
     'no-restricted-properties': ['error', { object: 'Math', property: 'random', message: 'no randomness in the domain' }, { object: 'Date', property: 'now', message: 'no clock in the domain' }],
     'no-restricted-syntax': ['error', { selector: 'NewExpression[callee.name="Date"][arguments.length=0]', message: 'no clock in the domain' }],
   } },
-  { files: ['server/database/**/*.ts'], rules: { 'no-restricted-imports': forbid([['**/services/**', '**/api/**', 'h3'], 'repositories know no service and no request']) } },
+  { files: ['server/database/**/*.ts'], rules: { 'no-restricted-imports': forbid([['**/services/**', '**/server/api/**', 'h3'], 'repositories know no service and no request']) } },
   { files: ['server/services/**/*.ts'], rules: { 'no-restricted-imports': forbid([['h3', '**/server/api/**', '**/server/utils/**', 'vue'], 'services know no request: pass plain values']) } },
   { files: ['server/reports/**/*.ts', 'server/mail/**/*.ts'], rules: { 'no-restricted-imports': forbid([['**/repositories/**', '**/database/**', 'kysely'], 'adapters are handed their data']) } },
   { files: ['server/workers/**/*.ts'], rules: { 'no-restricted-imports': forbid([['**/services/**', '**/api/**'], 'workers read and draw, they do not decide']) } },

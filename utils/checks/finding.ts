@@ -43,7 +43,7 @@ export interface CheckContext {
 
 export type Check = (context: CheckContext) => Finding[]
 
-export const RANK: Record<Outcome, number> = { note: 1, query: 2, stop: 3 }
+export const RANK = { note: 1, query: 2, stop: 3 } as const satisfies Record<Outcome, number>
 
 /** A finding with nothing compared, to be completed by its check. */
 export const finding = (check: CheckName, outcome: Outcome, message: string, rest: Partial<Omit<Finding, 'check' | 'outcome' | 'message'>> = {}): Finding =>
