@@ -7,14 +7,15 @@ import type { Plugin as EsbuildPlugin } from 'esbuild'
 import type { Plugin as RollupPlugin } from 'rollup'
 
 const MARK = '\0emitted:'
+const ASSET = 'asset-file'
 const QUERY = /\?(worker-file|asset-file)$/
 
 /** `?asset-file` inside a worker: the same file, seen from `workers/`. */
 const assetsInWorker: EsbuildPlugin = {
-  name: 'asset-file',
+  name: ASSET,
   setup(esbuild) {
-    esbuild.onResolve({ filter: /\?asset-file$/ }, args => ({ path: basename(args.path.replace(QUERY, '')), namespace: 'asset-file' }))
-    esbuild.onLoad({ filter: /.*/, namespace: 'asset-file' }, args => ({ contents: `export default new URL('../assets/${args.path}', import.meta.url).href` }))
+    esbuild.onResolve({ filter: /\?asset-file$/ }, args => ({ path: createRequire(args.importer).resolve(args.path.replace(QUERY, '')), namespace: ASSET }))
+    esbuild.onLoad({ filter: /.*/, namespace: ASSET }, args => ({ contents: `export default new URL('../assets/${basename(args.path)}', import.meta.url).href` }))
   },
 }
 
@@ -42,12 +43,17 @@ function emittedFiles(alias: Record<string, string>): RollupPlugin {
       if (!id.startsWith(MARK)) return null
       const [kind, ...rest] = id.slice(MARK.length).split(':')
       const file = rest.join(':')
-      if (kind === 'asset-file') {
-        if (!assets.has(file)) assets.set(file, this.emitFile({ type: 'asset', fileName: `assets/${basename(file)}`, source: await readFile(file) }))
-        return `export default import.meta.ROLLUP_FILE_URL_${assets.get(file)}`
+      const asset = async (path: string) => {
+        const held = assets.get(path) ?? this.emitFile({ type: 'asset', fileName: `assets/${basename(path)}`, source: await readFile(path) })
+        assets.set(path, held)
+        return held
       }
+      if (kind === ASSET) return `export default import.meta.ROLLUP_FILE_URL_${await asset(file)}`
       const out = await build({ entryPoints: [file], bundle: true, write: false, metafile: true, platform: 'node', format: 'esm', target: 'node20', packages: 'external', alias, plugins: [assetsInWorker] })
-      for (const input of Object.keys(out.metafile.inputs)) if (!input.includes(':')) this.addWatchFile(resolve(input))
+      for (const input of Object.keys(out.metafile.inputs)) {
+        if (input.startsWith(`${ASSET}:`)) await asset(input.slice(ASSET.length + 1))
+        else if (!input.includes(':')) this.addWatchFile(resolve(input))
+      }
       const external = Object.values(out.metafile.outputs).flatMap(o => o.imports.map(i => i.path)).filter(p => !isBuiltin(p))
       for (const path of new Set(external)) await this.resolve(path, file)
       const name = basename(file).replace(/\.ts$/, '.mjs')

@@ -16,6 +16,8 @@ export const ERROR_STATUS = {
   'id-in-use': 409,
   'head-moved': 409,
   'already-struck': 409,
+  'notice-settled': 409,
+  'notice-stopped': 409,
   'link-used': 410,
   'too-large': 413,
   'wrong-kind': 415,

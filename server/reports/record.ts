@@ -1,11 +1,11 @@
-import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces'
+import type { Column, Content, TDocumentDefinitions } from 'pdfmake/interfaces'
 import type { RecordFinding, RecordModel, RecordSection } from '#shared/reports/record-model'
 import { INK, INK_2, MARGIN, QUERY, RULE, STOP, caps, hanging, rowsOf, sheetOf, tableOf, textWidth } from '#server/reports/register'
 
 const COLOUR: Record<RecordFinding['outcome'], string> = { stop: STOP, query: QUERY, note: INK_2 }
 
 /** The kind of bar says it again, without colour: solid for a stop, dashed for a query, dotted for a note. */
-const bar = (outcome: RecordFinding['outcome']): Content => ({
+const bar = (outcome: RecordFinding['outcome']): Column => ({
   width: 8, canvas: [{ type: 'line', x1: 2, y1: 2, x2: 2, y2: 26, lineWidth: outcome === 'stop' ? 3 : 2, lineColor: COLOUR[outcome], ...(outcome === 'stop' ? {} : { dash: outcome === 'query' ? { length: 5, space: 3 } : { length: 1, space: 2 } }) }],
 })
 

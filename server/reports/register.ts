@@ -77,7 +77,7 @@ export interface Sheet {
 
 /** A sheet of the register: hairline pair down every page, running head from the second page on, page x of y. */
 export function sheetOf({ paper, language, title, subject, author, createdAt, fontSize, foot, page, running, content }: Sheet): TDocumentDefinitions {
-  const { width, height } = PAGE[paper]
+  const { height } = PAGE[paper]
   const line = (x: number) => ({ type: 'line' as const, x1: x, y1: 0, x2: x, y2: height, lineWidth: 0.5, lineColor: MARGIN })
   return {
     pageSize: paper, pageMargins: [LEFT, TOP, RIGHT, BOTTOM], language, version: '1.7',

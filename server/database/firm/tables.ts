@@ -28,6 +28,7 @@ export const NOTICE_STATES = ['planned', 'sent', 'delivered', 'bounced', 'failed
 export type NoticeState = (typeof NOTICE_STATES)[number]
 export interface NoticeRow { id: string, visit_id: string, party_id: string, party_name: string, channel: 'mail' | 'paper', address: string | null, language: 'en' | 'es', state: NoticeState, planned_at: string, released_by: string | null, released_at: string | null, subject: string }
 export interface OutboxRow { id: string, notice_id: string, state: 'held' | 'due' | 'sending' | 'sent' | 'failed', attempts: number, next_at: string, lease_until: string | null, message_id: string, raw: Uint8Array | null, content_hash: string | null, last_error: string | null, sent_at: string | null }
+export interface NoticePaperRow { notice_id: string, pdf: Uint8Array, content_hash: string, at: string }
 export interface NoticeEventRow { id: string, notice_id: string, at: string, what: string, by_person: string | null, detail: string | null }
 
 /** The firm's own file. Facts and standing have the shape that the projection gives (`utils/records/rows.ts`). */
@@ -56,4 +57,5 @@ export interface FirmDatabase extends FactsRows, StandingRows {
   notice: NoticeRow
   outbox: OutboxRow
   notice_event: NoticeEventRow
+  notice_paper: NoticePaperRow
 }

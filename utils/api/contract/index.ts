@@ -2,11 +2,12 @@ import type { z } from 'zod'
 import type { Contract } from '#shared/api/contract/define'
 import { DAYBOOK } from '#shared/api/contract/daybook'
 import { KIT } from '#shared/api/contract/kit'
+import { NOTICES } from '#shared/api/contract/notices'
 import { SESSION } from '#shared/api/contract/session'
 import { VISITS } from '#shared/api/contract/visits'
 
 /** All routes. A route that is missing here fails the access test; one that is here and not built does too. */
-export const CONTRACT = { ...DAYBOOK, ...KIT, ...SESSION, ...VISITS } as const
+export const CONTRACT = { ...DAYBOOK, ...KIT, ...NOTICES, ...SESSION, ...VISITS } as const
 
 export type RouteKey = keyof typeof CONTRACT
 type Of<K extends RouteKey> = (typeof CONTRACT)[K]

@@ -1,0 +1,9 @@
+import { showNotice } from '#server/services/notices'
+import { retryNotice } from '#server/services/release-notices'
+import { theJobs } from '#server/services/the-jobs'
+
+export default defineRoute('POST /api/notices/:id/again', ({ file, actor, house, params }) => {
+  retryNotice({ file, actor, world: house.world }, params.id)
+  theJobs().jobs.poke(file.slug)
+  return answer(202, showNotice(file, actor, params.id))
+})

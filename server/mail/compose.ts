@@ -1,0 +1,24 @@
+import MailComposer from 'nodemailer/lib/mail-composer'
+
+export interface Mail {
+  from: { name: string, address: string } | string
+  to: { name: string, address: string } | string
+  subject: string
+  text: string
+  html: string
+  messageId: string
+  date: Date
+  language: string
+  attachments?: { filename: string, content: Uint8Array, contentType: string }[]
+}
+
+/** Lines as SMTP sends them, the last one ended too: then the hash of these bytes is the hash of what arrives. */
+const asSent = (bytes: Buffer): Buffer => Buffer.from(`${bytes.toString('latin1').replace(/\r?\n/g, '\r\n').replace(/(\r\n)*$/, '')}\r\n`, 'latin1')
+
+/** The bytes of a mail, made once: what is sent again is the same mail. */
+export async function composeMail({ language, attachments = [], ...mail }: Mail): Promise<Buffer> {
+  return asSent(await new MailComposer({
+    ...mail, headers: { 'Content-Language': language, 'Auto-Submitted': 'auto-generated' },
+    attachments: attachments.map(a => ({ ...a, content: Buffer.from(a.content) })), disableFileAccess: true, disableUrlAccess: true,
+  }).compile().build())
+}
