@@ -69,4 +69,9 @@ describe('the kit of the entry form', () => {
   it('keeps the parties’ addresses on the server', async () => {
     expect(JSON.stringify(await kitOf('owner'))).not.toContain(firm.customer.email)
   })
+
+  it('repeats the last visit with work, not one at which nothing was applied', async () => {
+    await withHouse(dirs, house => signVisit({ file: house.firm(firm.slug), actor: actorOf('applicator'), world: realWorld }, visitSubmission(books, { place: books.kitchen, treatments: [] })))
+    expect((await kitOf('applicator')).last.find(visit => visit.placeId === books.kitchen.id)?.entries).toHaveLength(1)
+  })
 })

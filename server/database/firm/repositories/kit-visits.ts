@@ -18,12 +18,12 @@ const all = <R>(raw: Raw, query: Compilable<R>): R[] => {
 const read = <T>(body: Uint8Array): T => JSON.parse(new TextDecoder().decode(body)) as T
 const branchOf = (seen: BranchesSeen) => seen === 'all' ? sql<boolean>`1` : sql<boolean>`place.branch_id in (${sql.join(seen)})`
 
-/** The entries of each place's latest visit, as they stand; the index over (place, finish) finds it in one step a place. */
+/** The entries of each place's latest visit at which something was applied, as they stand; the index over (place, finish) finds it in one step a place. */
 export function lastVisits(raw: Raw, seen: BranchesSeen): LastVisit[] {
-  const latest = sql<string>`(select visit_id from entry_head as h where h.place_id = place.id and h.until_seq is null and h.status <> 'struck' and h.visit_id is not null order by h.finished_at desc, h.root desc limit 1)`
+  const latest = sql<string>`(select visit_id from entry_head as h where h.place_id = place.id and h.until_seq is null and h.status <> 'struck' and h.kind = 'entry' and h.visit_id is not null order by h.finished_at desc, h.root desc limit 1)`
   const rows = all(raw, q.selectFrom('place').innerJoin('entry_head', 'entry_head.place_id', 'place.id').innerJoin('leaf_body', 'leaf_body.seq', 'entry_head.facts_seq')
     .select(['place.id as placeId', 'entry_head.visit_id as visitId', 'entry_head.local_day as day', 'entry_head.root', 'leaf_body.body'])
-    .where('entry_head.visit_id', '=', latest).where('entry_head.until_seq', 'is', null).where('entry_head.status', '<>', 'struck').where('place.retired_on', 'is', null)
+    .where('entry_head.visit_id', '=', latest).where('entry_head.kind', '=', 'entry').where('entry_head.until_seq', 'is', null).where('entry_head.status', '<>', 'struck').where('place.retired_on', 'is', null)
     .where(branchOf(seen)).orderBy('place.id').orderBy('entry_head.root_seq'))
   const visits = new Map<string, LastVisit>()
   for (const row of rows) {
