@@ -48,7 +48,7 @@ export const noticeFileName = (model: NoticeModel): string => words('mail.notice
 
 const lineOf = (row: NoticeListRow): NoticeLine => ({
   id: row.id, visitId: row.visit_id, party: row.party_name, place: row.place_name, channel: row.channel, address: row.address, state: row.state, subject: row.subject,
-  plannedAt: row.planned_at, releasedAt: row.released_at, waiting: row.state === 'planned' && row.released_at === null, trouble: row.last_error, attempts: row.attempts ?? 0,
+  day: row.local_day, plannedAt: row.planned_at, releasedAt: row.released_at, waiting: row.state === 'planned' && row.released_at === null, trouble: row.last_error, attempts: row.attempts ?? 0,
 })
 
 export interface NoticeQuery { state?: NoticeState | 'waiting', cursor?: string }

@@ -8,8 +8,10 @@ import { newId } from '#server/services/house'
 import type { FirmFile } from '#server/services/house'
 import type { Signing } from '#server/services/sign-visit'
 import type { VisitReceipt } from '#shared/api/contract/visits'
-import { noticeSubject, whoIsTold } from '#shared/notices/recipients'
+import { whoIsTold } from '#shared/notices/recipients'
+import { writing } from '#shared/reports/writing'
 import { localDay } from '#shared/time/zoned'
+import { words as say } from '#server/words/words'
 
 interface Planned { facts: VisitSubmission['visit']['facts'], words: VisitSubmission['visit']['words'], receivedAt: string, entries: Leaf<'application'>[] }
 
@@ -29,11 +31,12 @@ export function planNotices({ file, actor, world }: Signing, { facts, words, rec
   if (entries.length === 0 || !placeId) return
   const day = localDay(facts.leftAt, facts.zone)
   const { notice, outbox, event } = prepared(file.raw)
-  const place = entries[0]?.body.snapshot.place.name ?? ''
+  // the line it is filed and mailed under
+  const subject = say('notices.subject', { place: entries[0]?.body.snapshot.place.name ?? '', day: writing(say).day(day) })
   for (const party of whoIsTold(booksOf(file.raw).parties(placeId), day)) {
     const id = newId(world)
     const released = party.email !== null && words.notify.includes(party.id)
-    notice.run(id, facts.id, party.id, party.name, party.email ? 'mail' : 'paper', party.email, party.language, 'planned', receivedAt, released ? actor.subject.id : null, released ? receivedAt : null, noticeSubject(place, day))
+    notice.run(id, facts.id, party.id, party.name, party.email ? 'mail' : 'paper', party.email, party.language, 'planned', receivedAt, released ? actor.subject.id : null, released ? receivedAt : null, subject)
     event.run(newId(world), id, receivedAt, released ? 'released' : 'planned', actor.subject.id, null)
     if (party.email) outbox.run(newId(world), id, released ? 'due' : 'held', receivedAt, `<${id}@${file.slug}.tankside>`)
   }

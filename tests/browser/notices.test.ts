@@ -36,8 +36,10 @@ describe('a notice that waits', () => {
   it('is shown as it will look, sent by one press, and read in the demonstration’s mailbox', async () => {
     await withPage(server, { viewport: DESK }, async (page) => {
       await enter(page, firm.people.officer.email, '/notices')
+      const waiting = page.getByRole('link', { name: '22 Quarry Lane' })
+      await waiting.waitFor()
       await look(page, 'notices')
-      await page.getByRole('link', { name: /^22 Quarry Lane/ }).click()
+      await waiting.click()
       await page.getByText('Keep people and animals off the treated areas until they are fully dry.').waitFor()
       expect(await accessibilityFaults(page)).toEqual([])
       await look(page, 'notice-page')

@@ -8,6 +8,3 @@ export function whoIsTold(parties: readonly PartyAtPlace[], day: string): Party[
   const holders = parties.filter(p => TOLD.includes(p.role) && p.from <= day && (p.to === null || day <= p.to)).map(p => p.party)
   return holders.filter((party, n) => holders.findIndex(other => other.id === party.id) === n)
 }
-
-/** The line a notice is filed and mailed under. */
-export const noticeSubject = (place: string, day: string): string => `${place}, ${day}`

@@ -8,7 +8,8 @@ export const NOTICE_STATES = ['planned', 'sent', 'delivered', 'bounced', 'failed
 
 export const NoticeLineSchema = z.object({
   id: z.string(), visitId: z.string(), party: z.string(), place: z.string(), channel: z.enum(['mail', 'paper']), address: z.string().nullable(), state: z.enum(NOTICE_STATES), subject: z.string(),
-  plannedAt: z.string(), releasedAt: z.string().nullable(),
+  /** Local day of the visit. */
+  day: z.string(), plannedAt: z.string(), releasedAt: z.string().nullable(),
   /** Planned, and nobody has said yet that it may go. */
   waiting: z.boolean(),
   /** What the last attempt at sending met, while it is tried again or after it was given up. */

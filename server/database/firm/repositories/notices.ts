@@ -1,14 +1,14 @@
 import { perConnection } from '#server/database/statement'
 import type { NoticeEventRow, NoticePaperRow, NoticeRow, NoticeState } from '#server/database/firm/tables'
 
-export interface NoticeListRow extends NoticeRow { branch_id: string, place_name: string, outbox_state: string | null, last_error: string | null, attempts: number | null }
+export interface NoticeListRow extends NoticeRow { branch_id: string, place_name: string, local_day: string, outbox_state: string | null, last_error: string | null, attempts: number | null }
 /** Which notices somebody sees: those of visits of these branches, or a party's own that were told. */
 export type NoticeScope = { branches: 'all' | string[] } | { partyId: string }
 /** What a party sees of its notices: nothing that was not told. */
 const TOLD: readonly NoticeState[] = ['sent', 'delivered', 'read', 'printed', 'handed-over']
 export interface NoticeFilter { state?: NoticeState, waiting?: boolean, before?: { at: string, id: string }, limit: number }
 
-const LIST = `select notice.*, visit.branch_id, visit.place_name, outbox.state as outbox_state, outbox.last_error, outbox.attempts
+const LIST = `select notice.*, visit.branch_id, visit.place_name, visit.local_day, outbox.state as outbox_state, outbox.last_error, outbox.attempts
   from notice join visit on visit.id = notice.visit_id left join outbox on outbox.notice_id = notice.id`
 const marks = (list: readonly unknown[]) => list.map(() => '?').join(', ')
 
