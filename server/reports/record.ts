@@ -30,7 +30,7 @@ function sectionBody(section: RecordSection): Content {
 
 function sectionOf(section: RecordSection): Content {
   // the head of a section never stands alone at the foot of a page
-  const few = section.kind === 'rows' && section.rows.length < 8
+  const few = (section.kind === 'rows' && section.rows.length < 8) || (section.kind === 'table' && section.table.rows.length < 5)
   return { unbreakable: few, margin: [0, 9, 0, 0], stack: [{ text: section.title, fontSize: 12, bold: true, margin: [0, 0, 0, 2], headlineLevel: 1 } as Content, sectionBody(section)] }
 }
 

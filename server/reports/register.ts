@@ -50,9 +50,12 @@ const ruled = (first: number, inner: number): CustomTableLayout => ({
 
 export const stackOf = (lines: readonly string[], strong = false): Content => ({ stack: lines.map((text, n) => ({ text, bold: strong && n === 0 })) })
 
+/** A row of more lines may go on overleaf, or it would leave half a page white. */
+const WHOLE = 8
+
 /** Word and value, ruled. */
 export const rowsOf = (rows: readonly { label: string, lines: string[] }[], labelWidth = 96): Content => ({
-  table: { widths: [labelWidth, '*'], dontBreakRows: true, body: rows.map(row => [caps(row.label), stackOf(row.lines)]) }, layout: ruled(0.5, 0.5),
+  table: { widths: [labelWidth, '*'], dontBreakRows: rows.every(row => row.lines.length <= WHOLE), body: rows.map(row => [caps(row.label), stackOf(row.lines)]) }, layout: ruled(0.5, 0.5),
 })
 
 /** A ruled table: a heavier rule under the head, hairlines between rows. */
