@@ -1,3 +1,4 @@
+import { sql } from 'kysely'
 import type { Expression, ExpressionBuilder, SqlBool } from 'kysely'
 import type { Raw } from '#server/database/connection'
 import { builder } from '#server/database/statement'
@@ -9,7 +10,8 @@ const q = builder<FirmDatabase>()
 /** The condition on `entry_head` that an actor's scope puts on every list, export and single reading. */
 export function inScope(scope: EntryScope) {
   return (eb: ExpressionBuilder<FirmDatabase, 'entry_head'>): Expression<SqlBool> => {
-    if (scope.branches === 'all') return eb.val(true)
+    // literals: SQLite binds no booleans
+    if (scope.branches === 'all') return eb.lit(true)
     const either: Expression<SqlBool>[] = []
     if (scope.branches.length > 0) either.push(eb('entry_head.branch_id', 'in', scope.branches))
     if (scope.personId) {
@@ -18,23 +20,24 @@ export function inScope(scope: EntryScope) {
       either.push(eb.exists(eb.selectFrom('entry_person').select('entry_person.n').whereRef('entry_person.root', '=', 'entry_head.root').whereRef('entry_person.from_seq', '=', 'entry_head.from_seq').where('entry_person.person_id', '=', personId)))
     }
     if (scope.partyId) either.push(placeOfParty(eb, scope.partyId))
-    return either.length > 0 ? eb.or(either) : eb.val(false)
+    return either.length > 0 ? eb.or(either) : eb.lit(false)
   }
 }
 
-/** Entries at a place (or below it) where the party had a role on the day of the work. */
+/** The entry's place and all that it lies in, as far up as the book goes. */
+const PLACE_AND_ABOVE = sql<string>`(with recursive above (id, parent_id) as (
+  select id, parent_id from place where id = entry_head.place_id union select p.id, p.parent_id from place as p join above on p.id = above.parent_id) select id from above)`
+
+/** Entries at a place (or anywhere below it) where the party had a role on the day of the work. */
 function placeOfParty(eb: ExpressionBuilder<FirmDatabase, 'entry_head'>, partyId: string): Expression<SqlBool> {
   return eb.exists(eb.selectFrom('party_role').select('party_role.id').where('party_role.party_id', '=', partyId)
-    .where(w => w.or([
-      w('party_role.place_id', '=', w.ref('entry_head.place_id')),
-      w('party_role.place_id', 'in', w.selectFrom('place').select('place.parent_id').whereRef('place.id', '=', 'entry_head.place_id').where('place.parent_id', 'is not', null).$castTo<{ parent_id: string }>()),
-    ]))
+    .where('party_role.place_id', 'in', PLACE_AND_ABOVE)
     .whereRef('party_role.from_day', '<=', 'entry_head.local_day')
     .where(w => w.or([w('party_role.to_day', 'is', null), w('party_role.to_day', '>=', w.ref('entry_head.local_day'))])))
 }
 
 /** May somebody with this scope see the entry as it stands? On the connection given, so also inside the ledger's transaction. */
 export function mayReadEntry(raw: Raw, root: string, scope: EntryScope): boolean {
-  const { sql, parameters } = q.selectFrom('entry_head').select('entry_head.root').where('entry_head.root', '=', root).where('entry_head.until_seq', 'is', null).where(inScope(scope)).compile()
-  return raw.prepare(sql).get(...parameters.map(p => typeof p === 'boolean' ? Number(p) : p)) !== undefined
+  const { sql: text, parameters } = q.selectFrom('entry_head').select('entry_head.root').where('entry_head.root', '=', root).where('entry_head.until_seq', 'is', null).where(inScope(scope)).compile()
+  return raw.prepare(text).get(...parameters) !== undefined
 }
