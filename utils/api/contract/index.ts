@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import type { Contract } from '#shared/api/contract/define'
+import { BOOKS } from '#shared/api/contract/books'
 import { DAYBOOK } from '#shared/api/contract/daybook'
 import { KIT } from '#shared/api/contract/kit'
 import { NOTICES } from '#shared/api/contract/notices'
@@ -7,7 +8,7 @@ import { SESSION } from '#shared/api/contract/session'
 import { VISITS } from '#shared/api/contract/visits'
 
 /** All routes. A route that is missing here fails the access test; one that is here and not built does too. */
-export const CONTRACT = { ...DAYBOOK, ...KIT, ...NOTICES, ...SESSION, ...VISITS } as const
+export const CONTRACT = { ...BOOKS, ...DAYBOOK, ...KIT, ...NOTICES, ...SESSION, ...VISITS } as const
 
 export type RouteKey = keyof typeof CONTRACT
 type Of<K extends RouteKey> = (typeof CONTRACT)[K]
