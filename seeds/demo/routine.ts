@@ -1,3 +1,4 @@
+import type { EntrySubmission } from '#shared/records/entry'
 import { plusDays, plusMonths } from '#shared/time/days'
 import { plusMinutes, resolveLocal } from '#shared/time/zoned'
 import { coded } from '../builders/coded'
@@ -16,6 +17,9 @@ import type { TreatmentKey, TreatmentPlan } from './treatments'
 export interface Span { since: string, day: string }
 
 const NOTES = ['Customer asked to call an hour ahead next time.', 'Ant trail at the north corner, gone to ground behind the meter.', 'Station 4 moved away from the walkway.', 'Door sweep at the back is worn: told the manager.', 'Watered in by the customer this evening.', 'Droppings behind the dishwasher, less than last time.']
+
+const EXPLANATIONS = ['The wind meter was in the other truck.', 'Forgot to read the weather before the spray was out.', 'Battery of the meter was flat; trees did not move.']
+const readingMissing = ({ facts }: EntrySubmission): boolean => facts.noWeather === 'not-taken' || facts.weather.some(reading => reading.wind === null)
 
 /** The houses that one applicator comes back to every four weeks, and on which day from the day they are due again. */
 const REGULARS: { due: number, treatments: TreatmentKey[] }[] = [
@@ -86,7 +90,7 @@ function oneVisit(maker: Maker, { branch, place, who, day, minutes, treatments, 
     followUpOn: followUpOn !== null && followUpOn <= plusDays(span.day, 15) ? null : followUpOn,
     note: dice.chance(0.08) ? dice.pick(NOTES) : null, signedAfter: late ? dice.between(25, 80) : 0,
     sizes: place.id + (dice.chance(0.75) ? '' : day),
-    change: entry => dice.chance(0.03) ? { ...entry, words: { ...entry.words, note: dice.pick(NOTES) } } : entry,
+    change: entry => ({ ...entry, words: { ...entry.words, note: dice.chance(0.03) ? dice.pick(NOTES) : null, explanation: readingMissing(entry) && dice.chance(0.85) ? dice.pick(EXPLANATIONS) : null } }),
   })
   return { kind: 'visit', who, ...visit }
 }

@@ -1,3 +1,4 @@
+import { execFileSync } from 'node:child_process'
 import { join } from 'node:path'
 import { afterAll, describe, expect, it } from 'vitest'
 import { checkRegistrationNumber } from '#shared/registration/number'
@@ -26,6 +27,13 @@ const opened = <T>(dirs: (typeof folders)[number], slug: string, work: (raw: Ret
     raw.close()
   }
 }
+
+describe('the command', () => {
+  it('loads in plain node, where only the package’s own import names are known', () => {
+    const said = execFileSync(process.execPath, ['--import', 'tsx', '--input-type=module', '-e', 'const made = await import("./seeds/demo/make.ts"); console.log(typeof made.makeDemonstration)'], { encoding: 'utf8' })
+    expect(said.trim()).toBe('function')
+  })
+})
 
 describe('twenty days of the demonstration, carried out', () => {
   it('gives the same chain for the same seed and day, and verifies', () => {
