@@ -18,6 +18,7 @@ export function useBook() {
       { to: '/people', word: t('common.nav.people'), open: ours && can('people.read') },
       { to: '/equipment', word: t('common.nav.equipment'), open: ours && can('book.read') },
       { to: '/notices', word: t('common.nav.notices'), open: can('notice.read') },
+      { to: '/firm', word: t('common.nav.firm'), open: ours && can('firm.read') },
       { to: '/account', word: t('common.nav.account'), open: true },
     ]
     return all.filter(page => page.open).map(({ to, word }) => ({ to, word }))

@@ -49,7 +49,10 @@ export async function readDaybook(file: FirmFile, actor: Actor, query: DaybookQu
   return { rows: await linesOf(file, actor, shown), next: heads.length > query.limit && last ? toCursor(keyOf(last, query.sort)) : null }
 }
 
-export const readTotals = (file: FirmFile, actor: Actor, filter: DaybookFilter) => totalsOf(file.read, entryScope(actor), ownFilter(actor, filter))
+export async function readTotals(file: FirmFile, actor: Actor, filter: DaybookFilter) {
+  const totals = await totalsOf(file.read, entryScope(actor), ownFilter(actor, filter))
+  return fieldClass(actor) === 'firm' ? totals : { ...totals, stops: null, queries: null }
+}
 
 /** Findings and lateness are the firm's own: a customer's filter by them is left out, sorting by them falls back to time. */
 function ownFilter<F extends DaybookFilter>(actor: Actor, filter: F): F {

@@ -67,7 +67,7 @@ describe('the Daybook', () => {
   })
 
   it.each<[string, () => string, number]>([
-    ['a place', () => `placeId=${books.house.id}`, 7], ['a registration number', () => `number=${books.granules.number}`, 6], ['a person', () => `personId=${firm.people.owner.id}`, 1],
+    ['a place', () => `placeId=${books.house.id}`, 7], ['a registration number', () => `number=${books.granules.number}`, 6], ['a number as a label prints it', () => `number=${encodeURIComponent(`EPA Reg. No. ${books.granules.number}`)}`, 6], ['a person', () => `personId=${firm.people.owner.id}`, 1],
     ['stops', () => 'finding=stop', 1], ['late ones', () => 'late=true', 13], ['nothing owed', () => 'owed=true', 0], ['status', () => 'status=struck', 0],
     ['a word of a product', () => 'q=bedrow', 6], ['the beginning of words, in any order', () => 'q=kitch+copp', 7], ['what somebody types that the search would read as its own language', () => `q=${encodeURIComponent('" OR (')}`, 0], ['a note', () => 'q=hyperlink', 2],
   ])('narrowed by %s', async (_, query, count) => {
@@ -84,7 +84,7 @@ describe('the Daybook', () => {
   })
 
   it('answers a cursor that is none, and a sort that is none, with the field and the reason', async () => {
-    for (const [query, path] of [['cursor=zzz', 'cursor'], ['sort=colour', 'sort'], ['from=yesterday', 'from'], ['limit=0', 'limit']]) {
+    for (const [query, path] of [['cursor=zzz', 'cursor'], ['sort=colour', 'sort'], ['from=yesterday', 'from'], ['q=a%00b', 'q'], ['limit=0', 'limit']]) {
       const answer = await officer(`/api/applications?${query}`)
       expect(answer.status).toBe(400)
       expect((await answer.json() as { issues: { path: string }[] }).issues[0]?.path).toBe(path)
@@ -99,6 +99,9 @@ describe('who sees what', () => {
     const seen = await rows('limit=200', customer)
     expect(seen).toHaveLength(14)
     for (const row of seen) expect([row.findings, row.late]).toEqual(row.kind === 'entry' ? [null, false] : [[], false])
+    expect(await rows('q=hyperlink', customer)).toEqual([])
+    expect(await rows('q=bedrow', customer)).toHaveLength(6)
+    expect(await get(customer, '/api/applications/totals')).toMatchObject({ stops: null, queries: null })
     const page = await get<EntryPage>(customer, `/api/applications/${roots[0]}`)
     expect([page.words, page.findings, page.history.map(h => h.words)]).toEqual([null, null, [null]])
     expect(await rows('limit=200', await signIn(server, 'officer@salt-marsh.example'))).toEqual([])

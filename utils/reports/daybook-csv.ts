@@ -11,7 +11,7 @@ const text = (value: string | null): string => value === null ? '' : /^[=+\-@\t\
 
 function weatherOf({ weather }: DaybookRow): string[] {
   if (typeof weather === 'string') return [weather, '', '', '', '', '']
-  return [weather.calm ? 'calm' : 'taken', weather.temperature?.value ?? '', weather.temperature?.unit ?? '', weather.wind?.value ?? (weather.calm ? '0' : ''), weather.wind?.unit ?? (weather.calm ? 'mph' : ''), weather.from ?? '']
+  return [weather.calm ? 'calm' : 'taken', weather.temperature?.value ?? '', weather.temperature?.unit ?? '', weather.wind?.value ?? '', weather.wind?.unit ?? '', weather.from ?? '']
 }
 
 /** A row of the export for each product of an entry; one for a visit with nothing applied. */

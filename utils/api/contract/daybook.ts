@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { FileAnswer, pageOf } from '#shared/api/contract/define'
 import type { Contracts } from '#shared/api/contract/define'
+import { asOnLabel } from '#shared/registration/basic'
 import { BookIdSchema, HashSchema, RecordIdSchema } from '#shared/records/shapes'
 import { CONFIRMATIONS, STATUSES } from '#shared/records/rows'
 import { EntryFactsSchema, EntryWordsSchema, SAYS } from '#shared/records/entry'
@@ -14,12 +15,14 @@ import { DaySchema } from '#shared/time/zoned'
 export const DAYBOOK_SORTS = ['finishedAt', 'recordedAt', 'place', 'person', 'number', 'status', 'finding'] as const
 export type DaybookSort = (typeof DAYBOOK_SORTS)[number]
 
-const word = (max: number) => z.string().trim().min(1).max(max).optional()
+// A control character is no word; NUL would end the search's text early.
+// eslint-disable-next-line no-control-regex -- exactly the control characters are refused
+const word = (max: number) => z.string().trim().min(1).max(max).regex(/^[^\u0000-\u001F]*$/).optional()
 const flag = z.enum(['true', 'false']).transform(value => value === 'true').optional()
 
 /** What narrows the Daybook. Days are local days of the finish; `number` of two groups finds the distributors' products too. */
 export const DaybookFilterSchema = z.object({
-  q: word(200), from: DaySchema.optional(), to: DaySchema.optional(), branchId: BookIdSchema.optional(), placeId: BookIdSchema.optional(), productId: BookIdSchema.optional(), number: word(40), personId: BookIdSchema.optional(),
+  q: word(200), from: DaySchema.optional(), to: DaySchema.optional(), branchId: BookIdSchema.optional(), placeId: BookIdSchema.optional(), productId: BookIdSchema.optional(), number: z.string().trim().min(1).max(60).transform(asOnLabel).optional(), personId: BookIdSchema.optional(),
   status: z.enum(STATUSES).optional(), finding: z.enum([...OUTCOMES, 'any']).optional(), late: flag, owed: flag,
 })
 export type DaybookFilter = z.output<typeof DaybookFilterSchema>
@@ -77,7 +80,7 @@ const IdParams = z.object({ id: RecordIdSchema })
 
 export const DAYBOOK = {
   'GET /api/applications': { ability: 'entry.read', summary: 'The Daybook: entries as they stand, filtered, sorted, by keyset', query: DaybookQuerySchema, answers: { 200: pageOf(DaybookRowSchema) } },
-  'GET /api/applications/totals': { ability: 'entry.read', summary: 'How many the same filters find; counting stops beyond 10,000', query: DaybookFilterSchema, answers: { 200: z.object({ count: z.number(), more: z.boolean(), stops: z.number(), queries: z.number(), products: z.number() }) } },
+  'GET /api/applications/totals': { ability: 'entry.read', summary: 'How many the same filters find; counting stops beyond 10,000', query: DaybookFilterSchema, answers: { 200: z.object({ count: z.number(), more: z.boolean(), stops: z.number().nullable(), queries: z.number().nullable(), products: z.number() }) } },
   'GET /api/applications/export.csv': { ability: 'entry.export', summary: 'What the same filters find, as CSV, a row a product', query: DaybookFilterSchema, answers: { 200: FileAnswer } },
   'GET /api/applications/:id': { ability: 'entry.read', summary: 'One entry as it stands, with its history', params: IdParams, answers: { 200: EntryPageSchema } },
   'GET /api/visits/:id': { ability: 'entry.read', summary: 'One visit with its entries', params: IdParams, answers: { 200: VisitPageSchema } },

@@ -14,15 +14,18 @@ const COLUMN = { finishedAt: 'finished_at', recordedAt: 'recorded_at', place: 'p
 /** Each word as a quoted prefix: what people type is never taken for the search's own language. */
 const searchTerms = (text: string): string => text.split(/\s+/).filter(Boolean).map(word => `"${word.replaceAll('"', '""')}"*`).join(' ')
 
+/** By all words of an entry, the firm's own among them; through the leaf, whose number the search has and whose root the head has. */
+const anyWords = (text: string) => sql<boolean>`entry_head.root in (select root from leaf where seq in (select rowid from entry_search where entry_search match ${searchTerms(text)}))`
+/** A party searches only what a party may read: the search's words hold the firm's notes too. */
+const openWords = (text: string) => sql<boolean>`(${sql.join(text.split(/\s+/).filter(Boolean).map(word => sql`(entry_head.place_name || ' ' || coalesce(entry_head.product_name, '') || ' ' || coalesce(entry_head.number, '') || ' ' || coalesce(entry_head.method_text, '') || ' ' || coalesce(entry_head.target_text, '')) like ${`%${word.replace(/[\\%_]/g, '\\$&')}%`} escape '\\'`), sql` and `)})`
+
 /** The heads that stand, narrowed by what was asked and by what the asker may see. */
 function narrowed(db: Kysely<FirmDatabase>, scope: EntryScope, filter: DaybookFilter): Heads {
   let query = db.selectFrom('entry_head').where('entry_head.until_seq', 'is', null).where(inScope(scope))
   const { q, from, to, branchId, placeId, productId, number, personId, status, finding, late, owed } = filter
   if (q) {
-    const reference = parseReference(q)
-    query = reference
-      ? query.where('entry_head.reference', '=', reference)
-      : query.where('entry_head.root_seq', 'in', db.selectFrom('entry_search').select('entry_search.rowid').where(sql<boolean>`entry_search match ${searchTerms(q)}`))
+    const reference = parseReference(q) ?? ''
+    query = query.where(eb => eb.or([eb('entry_head.reference', '=', reference), scope.partyId ? openWords(q) : anyWords(q)]))
   }
   if (from) query = query.where('entry_head.local_day', '>=', from)
   if (to) query = query.where('entry_head.local_day', '<=', to)
