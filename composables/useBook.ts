@@ -17,6 +17,7 @@ export function useBook() {
       { to: '/shelf', word: t('common.nav.shelf'), open: ours && can('book.read') },
       { to: '/people', word: t('common.nav.people'), open: ours && can('people.read') },
       { to: '/equipment', word: t('common.nav.equipment'), open: ours && can('book.read') },
+      { to: '/firm', word: t('common.nav.firm'), open: ours && can('firm.read') },
       { to: '/notices', word: t('common.nav.notices'), open: can('notice.read') },
       { to: '/firm', word: t('common.nav.firm'), open: ours && can('firm.read') },
       { to: '/account', word: t('common.nav.account'), open: true },

@@ -1,4 +1,5 @@
-import { existsSync, mkdirSync, readdirSync, renameSync, rmSync } from 'node:fs'
+import { randomBytes } from 'node:crypto'
+import { existsSync, mkdirSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs'
 import { dirname, join, resolve } from 'node:path'
 import { Passwords } from '#server/services/passwords'
 import { localDay } from '#shared/time/zoned'
@@ -7,12 +8,13 @@ import { BRANCHES } from '../../seeds/demo/people'
 
 /**
  * Fills a new data folder with the demonstration. It is made beside the folder and moved to its place when whole,
- * so that one that was interrupted leaves nothing that looks like data.
+ * so that one that was interrupted leaves nothing that looks like data. `demonstration.json` tells `npm run demo` that
+ * the folder is one, and keeps the session secret, so that who is signed in stays so over a restart.
  */
 const dataDir = resolve(process.env.NUXT_DATA_DIR ?? '.data')
 const keyDir = resolve(process.env.NUXT_KEY_DIR ?? '.keys')
-if (existsSync(dataDir)) {
-  console.error(`${dataDir} is there already. The demonstration is only made in a folder of its own.`)
+if (existsSync(dataDir) && readdirSync(dataDir).length > 0) {
+  console.error(`${dataDir} is not empty. The demonstration is only made in a folder of its own.`)
   process.exit(1)
 }
 const making = { dataDir: `${dataDir}.making-${process.pid}`, keyDir: `${keyDir}.making-${process.pid}` }
@@ -27,8 +29,14 @@ try {
     progress: (slug, done, of) => { if (done % 1000 === 0 || done === of) console.log(`  ${slug}: ${done} of ${of}`) },
   })
   for (const { firm, entries, leaves, settled, waiting } of made) console.log(`${firm}: ${entries} entries, ${leaves} leaves; ${waiting} notices wait, ${settled} lie in the past`)
+  writeFileSync(join(making.dataDir, 'demonstration.json'), JSON.stringify({ secret: randomBytes(33).toString('base64') }), { mode: 0o600 })
   mkdirSync(keyDir, { recursive: true, mode: 0o700 })
-  for (const name of readdirSync(making.keyDir)) renameSync(join(making.keyDir, name), join(keyDir, name))
+  for (const name of readdirSync(making.keyDir)) {
+    const key = join(keyDir, name)
+    // a key may belong to a copy of the data elsewhere: it is never written over
+    if (existsSync(key)) renameSync(key, `${key}.before-${started}`)
+    renameSync(join(making.keyDir, name), key)
+  }
   renameSync(making.dataDir, dataDir)
   console.log(`Made in ${((Date.now() - started) / 1000).toFixed(1)} s.`)
 }

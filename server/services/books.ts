@@ -1,11 +1,11 @@
 import type { Actor } from '#shared/access/abilities'
 import { branchesFor } from '#shared/access/abilities'
 import type { BookQuerySchema } from '#shared/api/contract/books'
-import type { Role } from '#shared/books/shapes'
+import type { PartyAtPlace, Role } from '#shared/books/shapes'
 import { AppError } from '#shared/errors'
 import { checkRegistrationNumber } from '#shared/registration/number'
 import type { z } from 'zod'
-import { booksOf } from '#server/database/firm/repositories/books'
+import { booksOf, toParty } from '#server/database/firm/repositories/books'
 import * as lists from '#server/database/firm/repositories/book-lists'
 import type { FirmFile } from '#server/services/house'
 
@@ -61,11 +61,26 @@ export function readPlace(file: FirmFile, actor: Actor, id: string) {
   return { ...place, above, below: lists.placesBelow(file.reader, id), parties, branch: found(books.branch(place.branchId)).name }
 }
 
-export const readProducts = (file: FirmFile, query: Asked) => {
+export const readParties = (file: FirmFile, actor: Actor, query: Asked) =>
+  page(lists.listParties(file.reader, seenBy(actor), asked(query)), query.limit, row => ({ ...toParty(row), places: row.places }))
+
+/** A party with its roles at places of the branches that the actor works in. @throws AppError not-found where it has none there. */
+export function readParty(file: FirmFile, actor: Actor, id: string) {
+  const party = toParty(found(lists.partyRow(file.reader, id)))
+  const branches = seenBy(actor)
+  const at = lists.rolesOfParty(file.reader, id, branches).map(r => ({ placeId: r.place_id, place: r.name, address: r.address, role: r.role as PartyAtPlace['role'], from: r.from_day, to: r.to_day }))
+  if (branches !== 'all' && at.length === 0) throw new AppError('not-found')
+  return { ...party, at }
+}
+
+const dayOf = (now: Date) => now.toISOString().slice(0, 10)
+
+export const readProducts = (file: FirmFile, query: Asked, now: Date) => {
   const books = booksOf(file.reader)
+  const day = dayOf(now)
   return page(lists.listProducts(file.reader, asked(query)), query.limit, (row) => {
     const { registrations, ...product } = found(books.product(row.id))
-    return { ...product, regions: [...new Set(registrations.filter(r => r.to === null).map(r => r.region))].sort() }
+    return { ...product, regions: [...new Set(registrations.filter(r => r.from <= day && (r.to === null || day <= r.to)).map(r => r.region))].sort() }
   })
 }
 
@@ -78,7 +93,7 @@ export function readProduct(file: FirmFile, id: string) {
 
 function people(file: FirmFile, rows: { id: string, name: string, to_day: string | null }[], now: Date) {
   const books = booksOf(file.reader)
-  const roles = lists.rolesOn(file.reader, rows.map(row => row.id), now.toISOString().slice(0, 10))
+  const roles = lists.rolesOn(file.reader, rows.map(row => row.id), dayOf(now))
   return rows.map(row => ({ ...found(books.person(row.id)), endsOn: row.to_day, roles: roles.filter(r => r.person_id === row.id).map(r => ({ role: r.role as Role, branch: r.branch })) }))
 }
 
@@ -89,8 +104,7 @@ export const readPeople = (file: FirmFile, query: Asked, now: Date) => {
 }
 
 export function readPerson(file: FirmFile, id: string, now: Date) {
-  const row = file.reader.prepare('select id, name, to_day from person where id = ?').get(id) as { id: string, name: string, to_day: string | null } | undefined
-  return found(people(file, [found(row)], now)[0])
+  return found(people(file, [found(lists.personRow(file.reader, id))], now)[0])
 }
 
 export const readEquipment = (file: FirmFile, actor: Actor, query: Asked) => {

@@ -1,3 +1,3 @@
 import { readProducts } from '#server/services/books'
 
-export default defineRoute('GET /api/products', ({ file, query }) => readProducts(file, query))
+export default defineRoute('GET /api/products', ({ file, query, now }) => readProducts(file, query, now))

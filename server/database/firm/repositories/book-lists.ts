@@ -2,7 +2,7 @@ import { sql } from 'kysely'
 import type { Compilable, SelectQueryBuilder } from 'kysely'
 import type { Raw } from '#server/database/connection'
 import { builder } from '#server/database/statement'
-import type { EquipmentRow, FirmDatabase, PersonRow, PlaceRow, ProductRow } from '#server/database/firm/tables'
+import type { EquipmentRow, FirmDatabase, PartyRow, PersonRow, PlaceRow, ProductRow } from '#server/database/firm/tables'
 
 const q = builder<FirmDatabase>()
 export type Branches = 'all' | string[]
@@ -33,6 +33,23 @@ export function listPlaces(raw: Raw, branches: Branches, asked: ListAsked): (Pla
   return all(raw, byName(query as never, 'place', asked))
 }
 
+const rolesInBranches = (branches: Branches) => sql`from party_role join place on place.id = party_role.place_id where party_role.party_id = party.id and ${inBranches('place.branch_id', branches)}`
+
+/** Parties with a role at a place of these branches; a party that has none yet is seen by who sees all branches. */
+export function listParties(raw: Raw, branches: Branches, asked: ListAsked): (PartyRow & { places: number })[] {
+  const query = q.selectFrom('party').selectAll('party').select(sql<number>`(select count(distinct place.id) ${rolesInBranches(branches)})`.as('places'))
+    .where(holds(['party.name', 'party.email', 'party.phone'], asked.q))
+    .where(branches === 'all' ? sql<boolean>`1` : sql<boolean>`exists (select 1 ${rolesInBranches(branches)})`)
+  return all(raw, byName(query as never, 'party', asked))
+}
+
+export const partyRow = (raw: Raw, id: string): PartyRow | undefined => all(raw, q.selectFrom('party').selectAll().where('id', '=', id))[0]
+
+/** A party's roles at places of these branches, by place and time. */
+export const rolesOfParty = (raw: Raw, id: string, branches: Branches) => all(raw, q.selectFrom('party_role').innerJoin('place', 'place.id', 'party_role.place_id')
+  .select(['place.id as place_id', 'place.name', 'place.address', 'party_role.role', 'party_role.from_day', 'party_role.to_day'])
+  .where('party_role.party_id', '=', id).where(inBranches('place.branch_id', branches)).orderBy('place.name').orderBy('party_role.from_day').orderBy('party_role.id'))
+
 export function listProducts(raw: Raw, asked: ListAsked): ProductRow[] {
   return all(raw, byName(q.selectFrom('product').selectAll('product').where(holds(['product.name', 'product.number', 'product.registrant'], asked.q)) as never, 'product', asked))
 }
@@ -40,6 +57,8 @@ export function listProducts(raw: Raw, asked: ListAsked): ProductRow[] {
 export function listPeople(raw: Raw, asked: ListAsked): PersonRow[] {
   return all(raw, byName(q.selectFrom('person').selectAll('person').where(sql<boolean>`(${holds(['person.name'], asked.q)} or exists (select 1 from licence where licence.person_id = person.id and ${holds(['licence.number'], asked.q)}))`) as never, 'person', asked))
 }
+
+export const personRow = (raw: Raw, id: string): PersonRow | undefined => all(raw, q.selectFrom('person').selectAll().where('id', '=', id))[0]
 
 export function listEquipment(raw: Raw, branches: Branches, asked: ListAsked): EquipmentRow[] {
   return all(raw, byName(q.selectFrom('equipment').selectAll('equipment').where('retired_on', 'is', null).where(inBranches('equipment.branch_id', branches)).where(holds(['equipment.name', 'equipment.kind_text', 'equipment.number'], asked.q)) as never, 'equipment', asked))
