@@ -9,13 +9,14 @@ import { insertBooks } from '../builders/books'
 import { Dice } from '../builders/random'
 import { carryOut, planWorld } from './carry-out'
 import type { PlanWorld } from './carry-out'
-import { settleOldNotices } from './notices'
+import { dealWithNotices } from './notices'
+import type { NoticesMade } from './notices'
 import { CUSTOMER, planDemonstration } from './plan'
 import type { FirmPlan, PlanSettings } from './plan'
 
 export const DEMO_PASSWORD = 'tankside-demo'
 
-export interface Made { firm: string, slug: string, leaves: number, entries: number, settled: number, waiting: number }
+export interface Made extends NoticesMade { firm: string, slug: string, leaves: number, entries: number }
 
 interface Making extends PlanSettings {
   house: HouseSettings
@@ -26,33 +27,33 @@ interface Making extends PlanSettings {
 }
 
 /** Fills an empty data folder with the demonstration. */
-export function makeDemonstration({ house: settings, password, now, progress = () => undefined, ...plan }: Making): Made[] {
+export async function makeDemonstration({ house: settings, password, now, progress = () => undefined, ...plan }: Making): Promise<Made[]> {
   const since = plan.since ?? plusMonths(plan.day, -18)
   const dice = new Dice(`${plan.seed} house`)
   const world = planWorld(Date.parse(`${since}T00:00:00Z`), size => dice.bytes(size))
   const house = new House(settings, world)
   try {
-    return planDemonstration(plan).map((firm) => {
+    settingsIn(house.directory.raw).set.run({ name: 'demo', value: now.toISOString() })
+    const made: Made[] = []
+    for (const firm of planDemonstration(plan)) {
       world.set(Date.parse(`${since}T00:00:00Z`))
-      const made = makeFirm(house, world, firm, { password, now, progress })
-      settingsIn(house.directory.raw).set.run({ name: 'demo', value: now.toISOString() })
-      return made
-    })
+      made.push(await makeFirm(house, world, firm, { password, progress }))
+    }
+    return made
   }
   finally {
     house.close()
   }
 }
 
-function makeFirm(house: House, world: PlanWorld, plan: FirmPlan, { password, now, progress }: Pick<Making, 'password' | 'now'> & Required<Pick<Making, 'progress'>>): Made {
+async function makeFirm(house: House, world: PlanWorld, plan: FirmPlan, { password, progress }: Required<Pick<Making, 'password' | 'progress'>>): Promise<Made> {
   const { slug, name, address, phone, mailFrom, book, dice } = plan
   const file = house.createFirm({ id: newId(world), slug, name, address, phone, country: 'US', mailFrom })
   insertBooks(file.raw, book.rows)
   addAccounts(house, file.id, plan, password)
   const own: PlanWorld = { ...world, random: size => dice.bytes(size) }
   carryOut(file, own, plan, (done, of) => progress(slug, done, of))
-  own.set(now.getTime())
-  const notices = settleOldNotices(file, own)
+  const notices = await dealWithNotices({ file, world: own, plan, dataDir: house.settings.dataDir })
   const count = (sql: string) => (file.raw.prepare(sql).get() as { n: number }).n
   return { firm: name, slug, leaves: count('select count(*) n from leaf'), entries: count('select count(*) n from leaf where kind = \'application\''), ...notices }
 }

@@ -1,4 +1,4 @@
-import { plusDays, plusMonths } from '#shared/time/days'
+import { plusMonths } from '#shared/time/days'
 import { idsFrom } from '../builders/ids'
 import { Dice } from '../builders/random'
 import type { Maker } from '../builders/visit'
@@ -20,6 +20,10 @@ export interface FirmPlan {
   slug: string, name: string, address: string, phone: string, mailFrom: string
   book: Book
   events: PlannedEvent[]
+  /** The instant at which the plan ends: nothing of it was received later. */
+  until: number
+  /** Who lets notices go. */
+  office: string
   /** What is drawn while it is carried out: salts, ids of notices. */
   dice: Dice
 }
@@ -40,6 +44,8 @@ export function planDemonstration(settings: PlanSettings): FirmPlan[] {
 }
 
 const inOrder = (events: PlannedEvent[]): PlannedEvent[] => events.sort((a, b) => a.at - b.at)
+/** The day begins in the westernmost branch. */
+const endOf = ({ day }: Span) => Date.parse(clockAt(day, -7 * 60, BRANCHES.CA.zone))
 const startOf = ({ since }: Span) => Date.parse(`${since}T00:00:00Z`)
 
 function firstFirm(seed: string, span: Span): FirmPlan {
@@ -47,10 +53,9 @@ function firstFirm(seed: string, span: Span): FirmPlan {
   const book = makeBook(dice, { ...span, branches: ['NY', 'CA', 'TX'], people: PEOPLE, customer: CUSTOMER })
   const maker: Maker = { book, dice, makeId: idsFrom(startOf(span), dice) }
   const usual = routine(maker, span, PEOPLE)
-  // the day begins in the westernmost branch: nothing is received after that
-  const before = Date.parse(clockAt(plusDays(span.day, 0), -7 * 60, BRANCHES.CA.zone))
-  const events = [...usual, ...regulars(maker, span, 'tomas'), ...specials(maker, span), ...changes(maker, usual, before)].filter(event => event.at < before)
-  return { slug: FIRST_FIRM, name: 'Alder & Wick Pest and Turf', address: BRANCHES.NY.address, phone: BRANCHES.NY.phone, mailFrom: 'Alder & Wick <book@alder-wick.example>', book, events: inOrder(events), dice }
+  const until = endOf(span)
+  const events = [...usual, ...regulars(maker, span, 'tomas'), ...specials(maker, span), ...changes(maker, usual, until)].filter(event => event.at < until)
+  return { slug: FIRST_FIRM, name: 'Alder & Wick Pest and Turf', address: BRANCHES.NY.address, phone: BRANCHES.NY.phone, mailFrom: 'Alder & Wick <book@alder-wick.example>', book, events: inOrder(events), until, office: 'officer', dice }
 }
 
 /** A one-man firm, whose owner also works for the first. */
@@ -64,5 +69,5 @@ function secondFirm(seed: string, span: Span): FirmPlan {
   const own = { name: 'Brackwater', address: '3 Mill Race, Hudson Bluff, NY 12144', phone: '518 555 0163', county: 'Rensselaer', registration: { number: '09977', kind: 'Pesticide business registration' } }
   const book = makeBook(dice, { ...span, branches: ['NY'], people: [ANSEL], customer: null, own, houses: 8 })
   const maker: Maker = { book, dice, makeId: idsFrom(startOf(span), dice) }
-  return { slug: SECOND_FIRM, name: 'Brackwater Lawn and Tree', address: own.address, phone: own.phone, mailFrom: 'Brackwater <book@second-firm.example>', book, events: inOrder(routine(maker, span, [ANSEL], 1)), dice }
+  return { slug: SECOND_FIRM, name: 'Brackwater Lawn and Tree', address: own.address, phone: own.phone, mailFrom: 'Brackwater <book@second-firm.example>', book, events: inOrder(routine(maker, span, [ANSEL], 1)), until: endOf(span), office: ANSEL.key, dice }
 }

@@ -24,11 +24,11 @@ const now = new Date()
 try {
   mkdirSync(dirname(dataDir), { recursive: true })
   const password = await new Passwords().make(DEMO_PASSWORD)
-  const made = makeDemonstration({
+  const made = await makeDemonstration({
     seed: process.env.DEMO_SEED ?? 'tankside', day: localDay(now.toISOString(), BRANCHES.CA.zone), now, password, house: { ...making, logHost: 'demo.tankside.example' },
     progress: (slug, done, of) => { if (done % 1000 === 0 || done === of) console.log(`  ${slug}: ${done} of ${of}`) },
   })
-  for (const { firm, entries, leaves, settled, waiting } of made) console.log(`${firm}: ${entries} entries, ${leaves} leaves; ${waiting} notices wait, ${settled} lie in the past`)
+  for (const { firm, entries, leaves, settled, told, waiting } of made) console.log(`${firm}: ${entries} entries, ${leaves} leaves; ${waiting} notices wait, ${told} were told last, ${settled} lie in the past`)
   writeFileSync(join(making.dataDir, 'demonstration.json'), JSON.stringify({ secret: randomBytes(33).toString('base64') }), { mode: 0o600 })
   mkdirSync(keyDir, { recursive: true, mode: 0o700 })
   for (const name of readdirSync(making.keyDir)) {

@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto'
 import MailComposer from 'nodemailer/lib/mail-composer'
 
 export interface Mail {
@@ -15,10 +16,10 @@ export interface Mail {
 /** Lines as SMTP sends them, the last one ended too: then the hash of these bytes is the hash of what arrives. */
 const asSent = (bytes: Buffer): Buffer => Buffer.from(`${bytes.toString('latin1').replace(/\r?\n/g, '\r\n').replace(/(\r\n)*$/, '')}\r\n`, 'latin1')
 
-/** The bytes of a mail, made once: what is sent again is the same mail. */
+/** The bytes of a mail. The line between its parts follows from the Message-ID, so that the same mail is the same bytes. */
 export async function composeMail({ language, attachments = [], ...mail }: Mail): Promise<Buffer> {
   return asSent(await new MailComposer({
-    ...mail, headers: { 'Content-Language': language, 'Auto-Submitted': 'auto-generated' },
+    ...mail, baseBoundary: createHash('sha256').update(mail.messageId).digest('hex').slice(0, 32), headers: { 'Content-Language': language, 'Auto-Submitted': 'auto-generated' },
     attachments: attachments.map(a => ({ ...a, content: Buffer.from(a.content) })), disableFileAccess: true, disableUrlAccess: true,
   }).compile().build())
 }

@@ -1,4 +1,6 @@
 import { execFileSync } from 'node:child_process'
+import { createHash } from 'node:crypto'
+import { readFileSync, readdirSync } from 'node:fs'
 import { join } from 'node:path'
 import { afterAll, describe, expect, it } from 'vitest'
 import { checkRegistrationNumber } from '#shared/registration/number'
@@ -36,8 +38,8 @@ describe('the command', () => {
 })
 
 describe('twenty days of the demonstration, carried out', () => {
-  it('gives the same chain for the same seed and day, and verifies', () => {
-    const [first, second] = folders.map(dirs => makeDemonstration({ seed: 'a seed', day: DAY, since: plusDays(DAY, -20), now: new Date(`${DAY}T15:00:00Z`), password: 'no hash', house: { ...dirs, logHost: 'demo.test.example' } }))
+  it('gives the same chain for the same seed and day, and verifies', async () => {
+    const [first, second] = await Promise.all(folders.map((dirs, n) => makeDemonstration({ seed: 'a seed', day: DAY, since: plusDays(DAY, -20), now: new Date(`${DAY}T1${n}:00:00Z`), password: 'no hash', house: { ...dirs, logHost: 'demo.test.example' } })))
     expect(first).toEqual(second)
     for (const slug of [FIRST_FIRM, SECOND_FIRM]) {
       const [one, other] = folders.map(dirs => opened(dirs, slug, verifyFirm))
@@ -56,12 +58,24 @@ describe('twenty days of the demonstration, carried out', () => {
     })
   })
 
-  it('leaves only the last days’ notices waiting, and nothing due to be sent', () => {
+  it('leaves the last days’ notices waiting, has told people of the days before by mail and on paper, and nothing is due to be sent', () => {
     opened(folders[0], FIRST_FIRM, (raw) => {
-      const states = raw.prepare<[], { state: string, first: string }>('select state, min(planned_at) first from notice group by state').all()
-      expect(states.map(row => row.state).sort()).toEqual(['handed-over', 'planned'])
-      expect(states.find(row => row.state === 'planned')?.first.slice(0, 10) ?? '').toMatch(/^2026-11-(2[6-9]|30)$/)
-      expect(raw.prepare('select distinct state from outbox').all()).toEqual([{ state: 'held' }])
+      const days = raw.prepare<[string], { day: string }>('select distinct substr(planned_at, 1, 10) day from notice where state = ? order by day')
+      const spans = ['sent', 'planned'].map(state => days.all(state).map(row => row.day)).map(all => [all.at(0), all.at(-1)])
+      expect(spans).toEqual([['2026-11-26', '2026-11-26'], ['2026-11-27', '2026-11-30']])
+      expect(raw.prepare('select state, count(*) > 0 some from outbox group by state').all()).toEqual([{ state: 'held', some: 1 }, { state: 'sent', some: 1 }])
+    })
+  })
+
+  it('has a leaf for each notice that was told, with the hash of what arrived in the mailbox or of the paper', () => {
+    opened(folders[0], FIRST_FIRM, (raw) => {
+      const mailbox = join(folders[0].dataDir, 'demo-mail')
+      const arrived = readdirSync(mailbox).map(name => createHash('sha256').update(readFileSync(join(mailbox, name))).digest('hex'))
+      const papers = raw.prepare<[], { content_hash: string }>('select content_hash from notice_paper').all().map(row => row.content_hash)
+      const leaves = raw.prepare<[], { hash: string }>('select json_extract(body, \'$.facts.contentHash\') hash from leaf join leaf_body using (seq) where kind = \'notice\'').all().map(row => row.hash)
+      expect(arrived.length).toBeGreaterThan(5)
+      expect(papers.length).toBeGreaterThan(0)
+      expect(leaves.sort()).toEqual([...arrived, ...papers].sort())
     })
   })
 })
