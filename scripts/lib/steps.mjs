@@ -6,6 +6,8 @@ import { join, resolve } from 'node:path'
 export const root = resolve(import.meta.dirname, '../..')
 
 const SOURCES = ['assets', 'components', 'composables', 'i18n', 'layouts', 'middleware', 'modules', 'pages', 'plugins', 'public', 'server', 'stores', 'utils', 'app.vue', 'error.vue', 'nuxt.config.ts', 'tailwind.config.ts', 'package-lock.json']
+/** Commands: they run from their source. */
+const NOT_BUILT = join(root, 'server/cli')
 
 export function run(command, args, options = {}) {
   const { status, error } = spawnSync(command, args, { cwd: root, stdio: 'inherit', ...options })
@@ -31,7 +33,7 @@ const modified = path => existsSync(path) ? statSync(path).mtimeMs : 0
 
 /** The newest change below a file or folder. */
 function newest(path) {
-  if (!existsSync(path)) return 0
+  if (!existsSync(path) || path === NOT_BUILT) return 0
   const is = statSync(path)
   return is.isDirectory() ? Math.max(0, ...readdirSync(path).map(name => newest(join(path, name)))) : is.mtimeMs
 }
