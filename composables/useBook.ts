@@ -19,7 +19,6 @@ export function useBook() {
       { to: '/equipment', word: t('common.nav.equipment'), open: ours && can('book.read') },
       { to: '/firm', word: t('common.nav.firm'), open: ours && can('firm.read') },
       { to: '/notices', word: t('common.nav.notices'), open: can('notice.read') },
-      { to: '/firm', word: t('common.nav.firm'), open: ours && can('firm.read') },
       { to: '/account', word: t('common.nav.account'), open: true },
     ]
     return all.filter(page => page.open).map(({ to, word }) => ({ to, word }))

@@ -56,6 +56,8 @@ const PAGES: Record<string, { as: 'officer' | 'applicator' | 'owner' | 'customer
   'daybook/[id]/amend': { as: 'officer', path: () => `/daybook/${entryId}/amend` },
   'places/index': { as: 'applicator', path: () => '/places' },
   'places/[id]': { as: 'officer', path: () => `/places/${books.house.id}` },
+  'parties/index': { as: 'officer', path: () => '/parties' },
+  'parties/[id]': { as: 'officer', path: () => `/parties/${firm.customer.id}` },
   'shelf/index': { as: 'officer', path: () => '/shelf' },
   'shelf/[id]': { as: 'officer', path: () => `/shelf/${books.spray.id}` },
   'people/index': { as: 'owner', path: () => '/people' },
