@@ -29,6 +29,15 @@ const DAY: Intl.DateTimeFormatOptions = { year: 'numeric', month: 'short', day: 
 const DAY_LONG: Intl.DateTimeFormatOptions = { weekday: 'long', year: 'numeric', month: 'long', day: 'numeric' }
 const TIME: Intl.DateTimeFormatOptions = { hour: 'numeric', minute: '2-digit' }
 
+const formatters = new Map<string, Intl.DateTimeFormat>()
+/** Making a formatter costs a hundred times what using it does; there are few of them, one a language, form and zone. */
+function formatter(language: string, options: Intl.DateTimeFormatOptions): Intl.DateTimeFormat {
+  const key = `${language} ${JSON.stringify(options)}`
+  const known = formatters.get(key) ?? new Intl.DateTimeFormat(language, options)
+  formatters.set(key, known)
+  return known
+}
+
 export function writing(words: Words, language = 'en-US'): Writing {
   const unit = unitWords(words)
 
@@ -41,7 +50,7 @@ export function writing(words: Words, language = 'en-US'): Writing {
   const percent = (value: string) => decimal(value, { style: 'unit', unit: 'percent' })
 
   function moment(at: string, options: Intl.DateTimeFormatOptions): string {
-    const parts = new Intl.DateTimeFormat(language, options).formatToParts(new Date(at))
+    const parts = formatter(language, options).formatToParts(new Date(at))
     return parts.map((part, i) => {
       // engines differ in the space before am and pm (U+202F or U+0020)
       if (part.type === 'literal' && parts[i + 1]?.type === 'dayPeriod') return '\u00A0'
